@@ -1,0 +1,30 @@
+import { z } from 'zod';
+import { idSchema } from './paging.ts';
+
+const rowPayload = <K extends string>(key: K) =>
+  z.strictObject({ payloadVersion: z.literal(1), utilityId: idSchema, [key]: idSchema } as {
+    payloadVersion: z.ZodLiteral<1>;
+    utilityId: typeof idSchema;
+  } & Record<K, typeof idSchema>);
+
+interface JobContract {
+  readonly payload: z.ZodType;
+  readonly attemptCount: number;
+  readonly backoffMs: number;
+}
+
+/** Every job: its payload (ids only, the handler reads the rows) and how often it is tried. */
+export const jobContracts = {
+  'run-assessment': { payload: rowPayload('assessmentId'), attemptCount: 5, backoffMs: 1000 },
+  'run-import': { payload: rowPayload('importId'), attemptCount: 2, backoffMs: 1000 },
+  'send-mail': { payload: rowPayload('deliveryId'), attemptCount: 8, backoffMs: 2000 },
+} as const satisfies Record<string, JobContract>;
+
+export type JobName = keyof typeof jobContracts;
+export type JobPayload<N extends JobName> = z.infer<(typeof jobContracts)[N]['payload']>;
+export const jobNames = ['run-assessment', 'run-import', 'send-mail'] as const satisfies readonly JobName[];
+
+/** Redis channel that carries progress of one row; what is sent is advisory, the row is the truth. */
+export function progressChannel(kind: 'assessment' | 'import', id: string): string {
+  return `stillspan:progress:${kind}:${id}`;
+}

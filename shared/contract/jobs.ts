@@ -7,6 +7,13 @@ const rowPayload = <K extends string>(key: K) =>
     utilityId: typeof idSchema;
   } & Record<K, typeof idSchema>);
 
+const lanePayload = z.strictObject({
+  payloadVersion: z.literal(1),
+  utilityId: idSchema,
+  assessmentId: idSchema,
+  laneIndex: z.number().int().min(0).describe('Lanes of one assessment share its chunks; any worker may run any lane'),
+});
+
 interface JobContract {
   readonly payload: z.ZodType;
   readonly attemptCount: number;
@@ -16,15 +23,20 @@ interface JobContract {
 /** Every job: its payload (ids only, the handler reads the rows) and how often it is tried. */
 export const jobContracts = {
   'run-assessment': { payload: rowPayload('assessmentId'), attemptCount: 5, backoffMs: 1000 },
+  'compute-chunks': { payload: lanePayload, attemptCount: 5, backoffMs: 1000 },
   'run-import': { payload: rowPayload('importId'), attemptCount: 2, backoffMs: 1000 },
   'send-mail': { payload: rowPayload('deliveryId'), attemptCount: 8, backoffMs: 2000 },
 } as const satisfies Record<string, JobContract>;
 
 export type JobName = keyof typeof jobContracts;
 export type JobPayload<N extends JobName> = z.infer<(typeof jobContracts)[N]['payload']>;
-export const jobNames = ['run-assessment', 'run-import', 'send-mail'] as const satisfies readonly JobName[];
+export const jobNames = ['run-assessment', 'compute-chunks', 'run-import', 'send-mail'] as const satisfies readonly JobName[];
 
 /** Redis channel that carries progress of one row; what is sent is advisory, the row is the truth. */
 export function progressChannel(kind: 'assessment' | 'import', id: string): string {
   return `stillspan:progress:${kind}:${id}`;
 }
+
+/** Redis channels that hint to the workers: jobs wait in the outbox; an assessment is to stop (its id is the message). */
+export const outboxChannel = 'stillspan:outbox';
+export const cancelChannel = 'stillspan:cancel';

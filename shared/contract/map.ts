@@ -4,8 +4,8 @@ import { idSchema } from './paging.ts';
 import { route } from './route.ts';
 
 const positionSchema = z.array(z.number()).min(2).max(3);
-const lineStringSchema = z.object({ type: z.literal('LineString'), coordinates: z.array(positionSchema) });
-const pointSchema = z.object({ type: z.literal('Point'), coordinates: positionSchema });
+export const lineStringSchema = z.object({ type: z.literal('LineString'), coordinates: z.array(positionSchema) });
+export const pointSchema = z.object({ type: z.literal('Point'), coordinates: positionSchema });
 export const multiPolygonSchema = z.object({
   type: z.literal('MultiPolygon'),
   coordinates: z.array(z.array(z.array(positionSchema).min(4))),

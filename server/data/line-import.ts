@@ -1,0 +1,134 @@
+import type { UtilityTransaction } from './database.ts';
+import { countLines, type LineRecord } from './line-import-records.ts';
+
+/** Rows a statement takes: large enough to be quick, small enough to keep memory and progress even. */
+const batchRowCount = 4000;
+
+interface SaveOptions {
+  readonly importId: string;
+  /** Roughness where no terrain zone covers the middle of a span; null takes the utility's own. */
+  readonly defaultRoughnessM: number | null;
+  readonly onProgress: (doneCount: number, totalCount: number) => Promise<void>;
+}
+
+interface Step {
+  readonly rows: readonly object[];
+  readonly sql: string;
+}
+
+const recordset = (columns: string) => `jsonb_to_recordset(:rows::jsonb) as item(${columns})`;
+
+const lineSql = `insert into lines (id, utility_id, name, voltage_v, is_assumed, import_run_id)
+  select item.id, :utilityId::uuid, item.name, item.voltage_v, item.is_assumed, :importId::uuid
+  from ${recordset('id uuid, name text, voltage_v double precision, is_assumed boolean')}`;
+
+const structureSql = `insert into structures
+    (id, utility_id, line_id, name, kind, structure_height_m, ground_elevation_m, geom, is_assumed)
+  select item.id, :utilityId::uuid, item.line_id, item.name, item.kind::structure_kind, item.structure_height_m,
+    item.ground_elevation_m, st_setsrid(st_makepoint(item.longitude_deg, item.latitude_deg), 4326), item.is_assumed
+  from ${recordset(`id uuid, line_id uuid, name text, kind text, structure_height_m double precision,
+    ground_elevation_m double precision, longitude_deg double precision, latitude_deg double precision, is_assumed boolean`)}`;
+
+const sectionSql = `insert into sections
+    (id, utility_id, line_id, name, order_index, ruling_span_m, section_length_m, geom, is_assumed)
+  select item.id, :utilityId::uuid, item.line_id, item.name, item.order_index, item.ruling_span_m, item.section_length_m,
+    (select st_makeline(structures.geom order by place.position)
+      from unnest(item.structure_ids) with ordinality as place(structure_id, position)
+      join structures on structures.id = place.structure_id),
+    item.is_assumed
+  from ${recordset(`id uuid, line_id uuid, name text, order_index int, ruling_span_m double precision,
+    section_length_m double precision, structure_ids uuid[], is_assumed boolean`)}`;
+
+// The smallest zone that covers the middle of the span wins: a wood inside a plain counts as wood.
+const spanSql = `insert into spans
+    (id, utility_id, section_id, line_id, order_index, from_structure_id, to_structure_id, span_length_m, bearing_deg,
+     mean_wire_height_m, roughness_m, terrain_zone_id, geom, is_assumed)
+  select item.id, :utilityId::uuid, item.section_id, item.line_id, item.order_index, item.from_structure_id,
+    item.to_structure_id, item.span_length_m, item.bearing_deg, item.mean_wire_height_m,
+    coalesce(zone.roughness_m, :defaultRoughnessM::double precision, utilities.default_roughness_m), zone.id, path.geom,
+    item.is_assumed
+  from ${recordset(`id uuid, section_id uuid, line_id uuid, order_index int, from_structure_id uuid, to_structure_id uuid,
+    span_length_m double precision, bearing_deg double precision, mean_wire_height_m double precision, is_assumed boolean`)}
+  join utilities on utilities.id = :utilityId::uuid
+  join structures as first_structure on first_structure.id = item.from_structure_id
+  join structures as second_structure on second_structure.id = item.to_structure_id
+  cross join lateral (select st_makeline(first_structure.geom, second_structure.geom) as geom) as path
+  left join lateral (
+    select terrain_zones.id, terrain_zones.roughness_m from terrain_zones
+    where st_covers(terrain_zones.geom, st_lineinterpolatepoint(path.geom, 0.5))
+    order by st_area(terrain_zones.geom), terrain_zones.id limit 1
+  ) as zone on true`;
+
+const wireSql = `insert into wires (id, utility_id, section_id, name, kind, conductor_type_id, tension_n, is_assumed)
+  select item.id, :utilityId::uuid, item.section_id, item.name, item.kind::wire_kind, item.conductor_type_id,
+    item.tension_n, item.is_assumed
+  from ${recordset(`id uuid, section_id uuid, name text, kind text, conductor_type_id uuid, tension_n double precision,
+    is_assumed boolean`)}`;
+
+const spanWireSql = `insert into span_wires (id, utility_id, span_id, wire_id, section_id)
+  select gen_random_uuid(), :utilityId::uuid, spans.id, wires.id, wires.section_id
+  from ${recordset('id uuid')}
+  join wires on wires.id = item.id
+  join spans on spans.section_id = wires.section_id`;
+
+function stepsOf(lines: readonly LineRecord[]): Step[] {
+  const sections = lines.flatMap(({ id, isAssumed, sections: own }) =>
+    own.map((section) => ({ ...section, lineId: id, isAssumed })),
+  );
+  const wires = sections.flatMap(({ id, isAssumed, wires: own }) =>
+    own.map((wire) => ({ ...wire, sectionId: id, isAssumed })),
+  );
+  return [
+    { sql: lineSql, rows: lines.map(({ id, name, voltageV, isAssumed }) => ({ id, name, voltageV, isAssumed })) },
+    {
+      sql: structureSql,
+      rows: lines.flatMap(({ id, isAssumed, structures }) =>
+        structures.map((structure) => ({ ...structure, lineId: id, isAssumed })),
+      ),
+    },
+    {
+      sql: sectionSql,
+      rows: sections.map(({ spans, wires: _wires, ...section }) => ({
+        ...section,
+        structureIds: [...spans.map(({ fromStructureId }) => fromStructureId), spans[spans.length - 1]?.toStructureId],
+      })),
+    },
+    {
+      sql: spanSql,
+      rows: sections.flatMap(({ id, lineId, isAssumed, spans }) =>
+        spans.map((span) => ({ ...span, sectionId: id, lineId, isAssumed })),
+      ),
+    },
+    { sql: wireSql, rows: wires },
+    { sql: spanWireSql, rows: wires.map(({ id }) => ({ id })) },
+  ];
+}
+
+const snakeKey = (key: string) => key.replace(/[A-Z]/g, (letter) => `_${letter.toLowerCase()}`);
+
+function jsonRows(rows: readonly object[]): string {
+  return JSON.stringify(
+    rows.map((row) => Object.fromEntries(Object.entries(row).map(([key, value]) => [snakeKey(key), value]))),
+  );
+}
+
+/**
+ * Stores whole lines in bulk. All of it happens in the transaction that is given, so an error anywhere leaves nothing.
+ *
+ * @throws AppError `duplicate` when a line of the same name was stored meanwhile
+ */
+export async function saveLines(tx: UtilityTransaction, lines: readonly LineRecord[], options: SaveOptions): Promise<void> {
+  const counts = countLines(lines);
+  const totalCount = counts.structureCount + counts.spanCount + counts.spanWireCount;
+  const { utilityId } = tx.actor;
+  const { importId, defaultRoughnessM, onProgress } = options;
+  let doneCount = 0;
+  for (const { sql, rows } of stepsOf(lines)) {
+    for (let start = 0; start < rows.length; start += batchRowCount) {
+      const batch = rows.slice(start, start + batchRowCount);
+      const savedCount = await tx.run(sql, { utilityId, importId, defaultRoughnessM, rows: jsonRows(batch) });
+      if (sql === structureSql || sql === spanSql || sql === spanWireSql) doneCount += savedCount;
+      await onProgress(doneCount, totalCount);
+    }
+  }
+}

@@ -1,0 +1,43 @@
+import type { Finding, FindingSeries } from '#shared/contract/findings.ts';
+import { ENGINE_VERSION, spanWireProfile, spanWireSeries } from '#shared/engine/index.ts';
+import type { Actor } from '#server/data/database.ts';
+import { engineBasisOf, engineCaseOf, limitsOf } from '#server/data/engine-case.ts';
+import { readFinding } from '#server/data/findings.read-model.ts';
+import type { FrozenCase } from '#server/data/frozen-input.ts';
+import { notFound } from '#server/platform/errors.ts';
+import type { Deps } from '../deps.ts';
+
+const profilePointCount = 241;
+
+function seriesOf(finding: Finding, frozen: FrozenCase, frequencyHz: number | null): FindingSeries {
+  const input = engineCaseOf(frozen);
+  const basis = engineBasisOf(frozen);
+  const { rows } = spanWireSeries(input, basis);
+  const limits = limitsOf(frozen);
+  const at = frequencyHz ?? finding.frequencyHz;
+  const profile = at === null ? null : spanWireProfile(input, basis, { frequencyHz: at, pointCount: profilePointCount });
+  return {
+    findingId: finding.id,
+    limitStressPa: limits.enduranceStressPa,
+    limitSource: limits.enduranceSource,
+    damperedLimitStressPa: limits.damperedStressPa,
+    rows,
+    profile: profile === null || profile.outcome !== 'steady' ? null : { frequencyHz: profile.frequencyHz, positionsM: [...profile.positionsM], amplitudesM: [...profile.amplitudesM], fluxesW: [...profile.fluxesW] },
+    isReproduced: finding.engineVersion === ENGINE_VERSION,
+  };
+}
+
+export const findingService = ({ database }: Pick<Deps, 'database'>) => {
+  const read = async (actor: Actor, findingId: string) => {
+    const found = await database.withUtility(actor, (tx) => readFinding(tx, findingId));
+    if (found === null) throw notFound('finding', findingId);
+    return found;
+  };
+  return {
+    getFinding: async (actor: Actor, findingId: string): Promise<Finding> => (await read(actor, findingId)).finding,
+    getSeries: async (actor: Actor, findingId: string, frequencyHz: number | null): Promise<FindingSeries> => {
+      const { finding, frozen } = await read(actor, findingId);
+      return seriesOf(finding, frozen, frequencyHz);
+    },
+  };
+};

@@ -1,0 +1,14 @@
+export type * from './assessment/span-wire-assessment.ts';
+export type { DamperHalf, DamperModel, ImpedanceRow } from './dampers/damper-model.ts';
+export type { PlacedDamper, SpanEnd } from './ends/span-end.ts';
+export type { MethodChoice, PartialMethodChoice } from './methods/method-choice.ts';
+export type { EngineWarning, MethodNote, MethodStanding } from './methods/method-note.ts';
+export type { EndPair, SpanOutcome, SpanRow } from './span/span-row.ts';
+export { ENGINE_VERSION } from './version.ts';
+export { assessSpanWire } from './assessment/assess-span-wire.ts';
+export type { EndResponseCache } from './assessment/end-response-cache.ts';
+export { spanWireProfile } from './assessment/span-wire-profile.ts';
+export type { ProfileRequest } from './assessment/span-wire-profile.ts';
+export { spanWireSeries } from './assessment/span-wire-series.ts';
+export { EngineInputError } from './numerics/engine-input-error.ts';
+export { turbulenceIntensity } from './wind/turbulence-intensity.ts';

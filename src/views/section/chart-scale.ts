@@ -1,0 +1,25 @@
+/** How the numbers of one quantity are shown in a chart, in the units of the reader. */
+export interface ChartScale {
+  readonly unit: string;
+  /** From SI to the unit shown. */
+  readonly shown: (value: number) => number;
+  /** Text of a number in the unit shown. */
+  readonly format: (shownValue: number) => string;
+}
+
+/** The scales of all quantities that the charts of a finding use. */
+export interface ChartScales {
+  readonly stress: ChartScale;
+  readonly amplitude: ChartScale;
+  readonly windSpeed: ChartScale;
+  readonly frequency: ChartScale;
+  readonly power: ChartScale;
+  readonly position: ChartScale;
+  readonly ratio: ChartScale;
+}
+
+/** Number with its unit, from SI. */
+export function quantityText(scale: ChartScale, value: number): string {
+  const text = scale.format(scale.shown(value));
+  return scale.unit === '' ? text : `${text}\u2009${scale.unit}`;
+}

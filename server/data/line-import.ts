@@ -2,7 +2,9 @@ import type { UtilityTransaction } from './database.ts';
 import { countLines, type LineRecord } from './line-import-records.ts';
 
 /** Rows a statement takes: large enough to be quick, small enough to keep memory and progress even. */
-const batchRowCount = 4000;
+const usualBatchRowCount = 4000;
+/** A wire becomes one row for each span of its section. */
+const wireBatchRowCount = 500;
 
 interface SaveOptions {
   readonly importId: string;
@@ -14,6 +16,7 @@ interface SaveOptions {
 interface Step {
   readonly rows: readonly object[];
   readonly sql: string;
+  readonly batchRowCount?: number;
 }
 
 const recordset = (columns: string) => `jsonb_to_recordset(:rows::jsonb) as item(${columns})`;
@@ -100,7 +103,7 @@ function stepsOf(lines: readonly LineRecord[]): Step[] {
       ),
     },
     { sql: wireSql, rows: wires },
-    { sql: spanWireSql, rows: wires.map(({ id }) => ({ id })) },
+    { sql: spanWireSql, rows: wires.map(({ id }) => ({ id })), batchRowCount: wireBatchRowCount },
   ];
 }
 
@@ -117,13 +120,17 @@ function jsonRows(rows: readonly object[]): string {
  *
  * @throws AppError `duplicate` when a line of the same name was stored meanwhile
  */
-export async function saveLines(tx: UtilityTransaction, lines: readonly LineRecord[], options: SaveOptions): Promise<void> {
+export async function saveLines(
+  tx: UtilityTransaction,
+  lines: readonly LineRecord[],
+  options: SaveOptions,
+): Promise<void> {
   const counts = countLines(lines);
   const totalCount = counts.structureCount + counts.spanCount + counts.spanWireCount;
   const { utilityId } = tx.actor;
   const { importId, defaultRoughnessM, onProgress } = options;
   let doneCount = 0;
-  for (const { sql, rows } of stepsOf(lines)) {
+  for (const { sql, rows, batchRowCount = usualBatchRowCount } of stepsOf(lines)) {
     for (let start = 0; start < rows.length; start += batchRowCount) {
       const batch = rows.slice(start, start + batchRowCount);
       const savedCount = await tx.run(sql, { utilityId, importId, defaultRoughnessM, rows: jsonRows(batch) });

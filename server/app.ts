@@ -34,7 +34,8 @@ function limited() {
     limit: requestsPerMinute,
     standardHeaders: 'draft-8',
     legacyHeaders: false,
-    handler: (_request, _response, next) => next(new AppError('too-many-requests', 'Too many requests in a minute. Wait a little.')),
+    handler: (_request, _response, next) =>
+      next(new AppError('too-many-requests', 'Too many requests in a minute. Wait a little.')),
   });
 }
 
@@ -68,7 +69,13 @@ export function createApp(deps: AppDeps): Express {
   app.disable('x-powered-by');
   app.set('trust proxy', config.STILLSPAN_TRUST_PROXY === 'true' ? 1 : false);
   const { measure, expose } = metrics();
-  app.use(pinoHttp({ logger, genReqId: () => randomUUID(), autoLogging: { ignore: (request) => request.url?.startsWith('/health') === true } }));
+  app.use(
+    pinoHttp({
+      logger,
+      genReqId: () => randomUUID(),
+      autoLogging: { ignore: (request) => request.url?.startsWith('/health') === true },
+    }),
+  );
   app.use((request, response, next) => {
     response.set('X-Request-Id', String(request.id));
     next();
@@ -79,10 +86,19 @@ export function createApp(deps: AppDeps): Express {
   const passport = new Passport();
   passport.serializeUser<Express.User>((user, done) => done(null, user));
   passport.deserializeUser<Express.User>((user, done) => done(null, user));
-  const authenticated = [sessionMiddleware(config, deps.sessionPool), passport.initialize(), passport.session(), absoluteTimeout(config)];
+  const authenticated = [
+    sessionMiddleware(config, deps.sessionPool),
+    passport.initialize(),
+    passport.session(),
+    absoluteTimeout(config),
+  ];
   const findProvider = providerSource(config.OIDC_ISSUER_URL, config.OIDC_CLIENT_ID);
   app.use(['/auth', '/api'], limited(), ...authenticated);
-  app.use('/auth', express.urlencoded({ extended: false, limit: '10kb' }), authRouter({ config, database, passport, findProvider }));
+  app.use(
+    '/auth',
+    express.urlencoded({ extended: false, limit: '10kb' }),
+    authRouter({ config, database, passport, findProvider }),
+  );
   mountApi(app, deps);
   mountClient(app, config.STILLSPAN_CLIENT_DIR);
   app.use(problemHandler);

@@ -26,7 +26,8 @@ const sessionPool = new pg.Pool({ connectionString: config.DATABASE_URL, max: 5 
 sessionPool.on('error', (error) => logger.warn({ err: error }, 'session connection lost'));
 const publisher = openFailFastRedis(config.REDIS_URL);
 const subscriber = openWaitingRedis(config.REDIS_URL);
-for (const redis of [publisher, subscriber]) redis.on('error', (error) => logger.warn({ err: error }, 'Redis connection'));
+for (const redis of [publisher, subscriber])
+  redis.on('error', (error) => logger.warn({ err: error }, 'Redis connection'));
 
 const app = createApp({
   config,
@@ -39,7 +40,9 @@ const app = createApp({
   readyChecks: { database: database.ping, redis: () => publisher.ping() },
 });
 const server = createServer(app);
-server.listen(config.STILLSPAN_PORT, config.STILLSPAN_HOST, () => logger.info({ port: config.STILLSPAN_PORT }, 'listening'));
+server.listen(config.STILLSPAN_PORT, config.STILLSPAN_HOST, () =>
+  logger.info({ port: config.STILLSPAN_PORT }, 'listening'),
+);
 server.on('error', (error) => {
   logger.fatal({ err: error }, `cannot listen on ${config.STILLSPAN_HOST}:${config.STILLSPAN_PORT} (STILLSPAN_PORT)`);
   process.exit(1);

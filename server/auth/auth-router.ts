@@ -46,10 +46,13 @@ async function signOut(request: Request, response: Response, dependencies: Depen
   const token: unknown = typeof body === 'object' && body !== null ? Reflect.get(body, 'csrfToken') : undefined;
   if (request.user !== undefined) guardCsrf(request, typeof token === 'string' ? token : undefined);
   const idToken = request.user?.idToken;
-  await new Promise<void>((resolve, reject) => request.session.destroy((error: unknown) => (error ? reject(error) : resolve())));
+  await new Promise<void>((resolve, reject) =>
+    request.session.destroy((error: unknown) => (error ? reject(error) : resolve())),
+  );
   const home = new URL('/signed-out', config.STILLSPAN_PUBLIC_URL).href;
   const provider = idToken === undefined ? null : await findProvider().catch(() => null);
-  if (provider?.endSessionUrl === null || provider === null || idToken === undefined) return response.redirect(303, home);
+  if (provider?.endSessionUrl === null || provider === null || idToken === undefined)
+    return response.redirect(303, home);
   const end = new URL(provider.endSessionUrl);
   end.searchParams.set('id_token_hint', idToken);
   end.searchParams.set('post_logout_redirect_uri', home);

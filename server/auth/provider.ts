@@ -36,7 +36,10 @@ async function discover(issuerUrl: string, clientId: string): Promise<Provider> 
     endSessionUrl: found.end_session_endpoint ?? null,
     verifyIdToken: async (idToken) => {
       const options = { issuer: found.issuer, audience: clientId, clockTolerance: clockToleranceSeconds };
-      const { payload } = await jwtVerify(idToken, keys, { ...options, requiredClaims: ['sub', 'exp', 'iat', 'nonce'] });
+      const { payload } = await jwtVerify(idToken, keys, {
+        ...options,
+        requiredClaims: ['sub', 'exp', 'iat', 'nonce'],
+      });
       return payload;
     },
   };
@@ -51,7 +54,9 @@ export function providerSource(issuerUrl: string, clientId: string): () => Promi
       return await found;
     } catch (error) {
       found = null;
-      throw new AppError('upstream-failed', 'The identity provider does not answer. Try again in a minute.', { cause: error });
+      throw new AppError('upstream-failed', 'The identity provider does not answer. Try again in a minute.', {
+        cause: error,
+      });
     }
   };
 }

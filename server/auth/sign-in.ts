@@ -41,7 +41,9 @@ export function signInWith(database: Database, config: Config): (idToken: string
     }
     const roles = rolesIn(claims[config.OIDC_ROLES_CLAIM]);
     if (roles.length === 0) {
-      throw refused(`This person holds no role here (claim ${config.OIDC_ROLES_CLAIM}). Ask the administrator of the utility.`);
+      throw refused(
+        `This person holds no role here (claim ${config.OIDC_ROLES_CLAIM}). Ask the administrator of the utility.`,
+      );
     }
     const { sub, email, name = email, iss } = named.data;
     const person = { issuer: iss, subject: sub, displayName: name, email, roles };

@@ -8,7 +8,10 @@ import { instantColumn } from './rows.ts';
 const deliveryRow = z.object({
   recipientName: z.string(),
   state: z.enum(['waiting', 'sent', 'failed']),
-  sentAt: z.string().nullable().transform((text) => (text === null ? null : new Date(text).toISOString())),
+  sentAt: z
+    .string()
+    .nullable()
+    .transform((text) => (text === null ? null : new Date(text).toISOString())),
   isDigest: z.boolean(),
   attemptCount: z.number(),
   failureDetail: z.string().nullable(),

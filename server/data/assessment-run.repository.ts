@@ -18,16 +18,23 @@ const runSchema = z.object({
 });
 export type AssessmentRun = z.infer<typeof runSchema>;
 
+const selectRun = `select assessments.id, assessments.state, assessments.selection, assessments.frozen_at,
+    assessments.cancel_requested_at, assessments.total_count, bases.name as basis_name,
+    bases.version_number as basis_version_number, bases.spec as basis_spec
+  from assessments join bases on bases.id = assessments.basis_id where assessments.id = :assessmentId`;
+
 /** The row of an assessment, locked against other workers until the transaction ends. */
 export function lockRun(tx: UtilityTransaction, assessmentId: string): Promise<AssessmentRun | null> {
-  return tx.first(
-    runSchema,
-    `select assessments.id, assessments.state, assessments.selection, assessments.frozen_at, assessments.cancel_requested_at,
-       assessments.total_count, bases.name as basis_name, bases.version_number as basis_version_number, bases.spec as basis_spec
-     from assessments join bases on bases.id = assessments.basis_id
-     where assessments.id = :assessmentId for update of assessments`,
-    { assessmentId },
-  );
+  return tx.first(runSchema, `${selectRun} for update of assessments`, { assessmentId });
+}
+
+/**
+ * The row of an assessment for freezing its input: other workers that would freeze it wait, but the row itself stays
+ * free, so that a cancel request does not.
+ */
+export async function readRunForFreezing(tx: UtilityTransaction, assessmentId: string): Promise<AssessmentRun | null> {
+  await tx.run('select pg_advisory_xact_lock(hashtextextended(:assessmentId, 1))', { assessmentId });
+  return tx.first(runSchema, selectRun, { assessmentId });
 }
 
 export async function markRunning(tx: UtilityTransaction, assessmentId: string, engineVersion: string): Promise<void> {
@@ -44,7 +51,11 @@ export async function insertChunks(
   assessmentId: string,
   chunks: readonly { chunkIndex: number; input: FrozenChunk }[],
 ): Promise<void> {
-  const rows = chunks.map(({ chunkIndex, input }) => ({ chunk_index: chunkIndex, span_wire_count: input.items.length, input }));
+  const rows = chunks.map(({ chunkIndex, input }) => ({
+    chunk_index: chunkIndex,
+    span_wire_count: input.items.length,
+    input,
+  }));
   await tx.run(
     `insert into assessment_chunks (assessment_id, chunk_index, utility_id, span_wire_count, input)
      select :assessmentId, chunk_index, :utilityId, span_wire_count, input
@@ -84,7 +95,8 @@ export async function markChunkDone(
     'update assessment_chunks set done_at = now() where assessment_id = :assessmentId and chunk_index = :chunkIndex and done_at is null',
     chunk,
   );
-  if (done === 1) await tx.run('update assessments set done_count = done_count + :spanWireCount where id = :assessmentId', chunk);
+  if (done === 1)
+    await tx.run('update assessments set done_count = done_count + :spanWireCount where id = :assessmentId', chunk);
 }
 
 /** How many chunks are not done. */
@@ -117,4 +129,16 @@ export function listLiveRuns(tx: UtilityTransaction) {
     `select id, frozen_at is not null as is_frozen, cancel_requested_at is not null as is_cancel_requested
      from assessments where state in ('queued', 'running') order by created_at limit 200`,
   );
+}
+
+/** Adds method notes to those an assessment names already. */
+export async function setMethods(
+  tx: UtilityTransaction,
+  assessmentId: string,
+  methods: readonly { name: string; standing: string; source: string }[],
+): Promise<void> {
+  await tx.run('update assessments set methods = :methods::jsonb where id = :assessmentId', {
+    assessmentId,
+    methods: JSON.stringify(methods),
+  });
 }

@@ -1,5 +1,10 @@
 import { z } from 'zod';
-import { assessmentSchema, type Assessment, type AssessmentState, type Selection } from '#shared/contract/assessments.ts';
+import {
+  assessmentSchema,
+  type Assessment,
+  type AssessmentState,
+  type Selection,
+} from '#shared/contract/assessments.ts';
 import { keysetPage, type PageRequest } from './cursor.ts';
 import type { UtilityTransaction } from './database.ts';
 import { instantColumn } from './rows.ts';
@@ -26,7 +31,10 @@ export function findAssessment(tx: UtilityTransaction, assessmentId: string): Pr
   return tx.first(rowSchema, `select ${columns} from ${from} where assessments.id = :assessmentId`, { assessmentId });
 }
 
-export function listAssessments(tx: UtilityTransaction, page: PageRequest & { states?: AssessmentState[] | undefined }) {
+export function listAssessments(
+  tx: UtilityTransaction,
+  page: PageRequest & { states?: AssessmentState[] | undefined },
+) {
   return keysetPage(tx, page, {
     schema: rowSchema,
     columns,
@@ -56,7 +64,10 @@ export async function insertAssessment(tx: UtilityTransaction, assessment: NewAs
 }
 
 /** Which of the picked things exist for this utility: how many rows the selection names and how many were found. */
-export async function countSelection(tx: UtilityTransaction, selection: Selection): Promise<{ namedCount: number; foundCount: number }> {
+export async function countSelection(
+  tx: UtilityTransaction,
+  selection: Selection,
+): Promise<{ namedCount: number; foundCount: number }> {
   if (selection.kind === 'whole-network') return { namedCount: 0, foundCount: 0 };
   const [table, ids] =
     selection.kind === 'spans'
@@ -65,7 +76,11 @@ export async function countSelection(tx: UtilityTransaction, selection: Selectio
         ? (['sections', selection.sectionIds] as const)
         : (['lines', selection.lineIds] as const);
   const named = [...new Set(ids)];
-  const row = await tx.first(z.object({ count: z.number() }), `select count(*)::int as count from ${table} where id = any(:named::uuid[])`, { named });
+  const row = await tx.first(
+    z.object({ count: z.number() }),
+    `select count(*)::int as count from ${table} where id = any(:named::uuid[])`,
+    { named },
+  );
   return { namedCount: named.length, foundCount: row?.count ?? 0 };
 }
 
@@ -97,5 +112,9 @@ export async function requeueAssessment(tx: UtilityTransaction, assessmentId: st
 
 const progressSchema = assessmentSchema.pick({ id: true, state: true, step: true, doneCount: true, totalCount: true });
 export function findProgress(tx: UtilityTransaction, assessmentId: string) {
-  return tx.first(progressSchema, 'select id, state, step, done_count, total_count from assessments where id = :assessmentId', { assessmentId });
+  return tx.first(
+    progressSchema,
+    'select id, state, step, done_count, total_count from assessments where id = :assessmentId',
+    { assessmentId },
+  );
 }

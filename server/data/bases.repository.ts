@@ -19,7 +19,11 @@ export function listBases(tx: UtilityTransaction, page: PageRequest) {
     from,
     where: [],
     bindings: {},
-    key: { expression: `bases.name || chr(1) || lpad((100000 - bases.version_number)::text, 6, '0')`, type: 'text', direction: 'ascending' },
+    key: {
+      expression: `bases.name || chr(1) || lpad((100000 - bases.version_number)::text, 6, '0')`,
+      type: 'text',
+      direction: 'ascending',
+    },
     id: 'bases.id',
     countFrom: 'bases',
   });
@@ -34,7 +38,10 @@ export function findDefaultBasis(tx: UtilityTransaction): Promise<Basis | null> 
 }
 
 export async function isClimateKnown(tx: UtilityTransaction, climateId: string): Promise<boolean> {
-  return (await tx.first(z.object({ id: z.uuid() }), 'select id from climates where id = :climateId', { climateId })) !== null;
+  return (
+    (await tx.first(z.object({ id: z.uuid() }), 'select id from climates where id = :climateId', { climateId })) !==
+    null
+  );
 }
 
 /** Saves the next version of a name; versions are never changed afterwards. */

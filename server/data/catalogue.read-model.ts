@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import type { z } from 'zod';
 import { climateSchema, conductorTypeSchema, damperTypeSchema, terrainZoneSchema } from '#shared/contract/catalogue.ts';
 import { keysetPage, type PageRequest } from './cursor.ts';
 import type { UtilityTransaction } from './database.ts';
@@ -6,7 +6,11 @@ import { containing } from './lines.read-model.ts';
 
 type CatalogueQuery = PageRequest & { search?: string | undefined };
 
-function byName<S extends z.ZodType>(tx: UtilityTransaction, query: CatalogueQuery, list: { schema: S; table: string; columns: string }) {
+function byName<S extends z.ZodType>(
+  tx: UtilityTransaction,
+  query: CatalogueQuery,
+  list: { schema: S; table: string; columns: string },
+) {
   const name = `${list.table}.name`;
   return keysetPage(tx, query, {
     schema: list.schema,
@@ -49,7 +53,9 @@ export const listTerrainZones = (tx: UtilityTransaction, query: CatalogueQuery) 
   byName(tx, query, { schema: terrainZoneSchema, table: 'terrain_zones', columns: terrainColumns });
 
 export function findTerrainZone(tx: UtilityTransaction, terrainZoneId: string) {
-  return tx.first(terrainZoneSchema, `select ${terrainColumns} from terrain_zones where id = :terrainZoneId`, { terrainZoneId });
+  return tx.first(terrainZoneSchema, `select ${terrainColumns} from terrain_zones where id = :terrainZoneId`, {
+    terrainZoneId,
+  });
 }
 
 /** Writes a terrain zone and the roughness of the spans in it, if the version is the one that was read. */

@@ -55,7 +55,10 @@ export async function keysetPage<S extends z.ZodType>(
   list: KeysetList<S>,
 ): Promise<Page<z.infer<S>>> {
   const conditions = [...list.where];
-  const bindings: Record<string, unknown> & NonNullable<Bindings> = { ...list.bindings, limitCount: page.limitCount + 1 };
+  const bindings: Record<string, unknown> & NonNullable<Bindings> = {
+    ...list.bindings,
+    limitCount: page.limitCount + 1,
+  };
   if (page.cursor !== undefined) {
     const [cursorKey, cursorId] = readCursor(page.cursor);
     conditions.push(afterCursor(list.key, list.id, cursorKey));
@@ -91,6 +94,10 @@ export async function keysetPage<S extends z.ZodType>(
 async function countRows<S extends z.ZodType>(tx: UtilityTransaction, list: KeysetList<S>): Promise<number | null> {
   if (list.countFrom === null) return null;
   const where = list.where.length === 0 ? '' : `where ${list.where.join(' and ')}`;
-  const row = await tx.first(z.object({ count: z.number() }), `select count(*)::int as count from ${list.countFrom} ${where}`, list.bindings);
+  const row = await tx.first(
+    z.object({ count: z.number() }),
+    `select count(*)::int as count from ${list.countFrom} ${where}`,
+    list.bindings,
+  );
   return row?.count ?? null;
 }

@@ -14,9 +14,13 @@ export function translateDatabaseError(error: unknown): unknown {
     case '23503':
       return new AppError('not-found', `A record this one refers to does not exist (${constraint}).`, { cause: error });
     case '23514':
-      return new AppError('invalid-input', `A value is outside what the database allows (${constraint}).`, { cause: error });
+      return new AppError('invalid-input', `A value is outside what the database allows (${constraint}).`, {
+        cause: error,
+      });
     case '42501':
-      return new AppError('not-allowed', 'The database refused this for the utility that is signed in.', { cause: error });
+      return new AppError('not-allowed', 'The database refused this for the utility that is signed in.', {
+        cause: error,
+      });
     default:
       return error;
   }

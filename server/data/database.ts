@@ -10,7 +10,9 @@ export interface Actor {
   readonly requestId: string | null;
 }
 
-type Bindings = Readonly<Record<string, string | number | boolean | Date | null | readonly string[] | readonly number[]>>;
+type Bindings = Readonly<
+  Record<string, string | number | boolean | Date | null | readonly string[] | readonly number[]>
+>;
 
 /** One transaction bound to one utility; `withUtility` is the only way to get one. */
 export interface UtilityTransaction {
@@ -63,7 +65,8 @@ export function openDatabase(url: string, poolSizeCount = 10): Database {
       }),
     utilityIds: async () =>
       (await ids('select stillspan_utility_ids() as id')).flatMap(({ id }) => (id === null ? [] : [id])),
-    utilityIdOfCode: async (code) => (await ids('select stillspan_utility_id_of_code(:code) as id', { code }))[0]?.id ?? null,
+    utilityIdOfCode: async (code) =>
+      (await ids('select stillspan_utility_id_of_code(:code) as id', { code }))[0]?.id ?? null,
     ping: async () => {
       await knex.raw('select 1');
     },

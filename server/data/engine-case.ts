@@ -35,7 +35,8 @@ function endOf({ item, damperTypes }: FrozenCase, side: 'from' | 'to'): SpanEnd 
     .filter((placement) => placement.side === side)
     .map(({ distanceM, damperTypeId }) => {
       const type = damperTypes[damperTypeId];
-      if (type === undefined) throw new Error(`the frozen input names the damper type ${damperTypeId} and does not hold it`);
+      if (type === undefined)
+        throw new Error(`the frozen input names the damper type ${damperTypeId} and does not hold it`);
       return { distanceM, model: type.model };
     });
   return { clampReflectionRatio: 1, dampers };
@@ -74,7 +75,11 @@ export function engineBasisOf(frozen: FrozenCase): VibrationBasis {
     damperedStrain:
       limits.damperedStrainRatio === null
         ? null
-        : { strainRatio: limits.damperedStrainRatio, convention: limits.damperedStrainConvention, source: limits.damperedStrainSource },
+        : {
+            strainRatio: limits.damperedStrainRatio,
+            convention: limits.damperedStrainConvention,
+            source: limits.damperedStrainSource,
+          },
     fatigueCurve: frozen.conductor.aluminiumLayerCount > 1 ? 'multi-layer' : 'single-layer',
     climate: frozen.climate === null ? null : { sectors: frozen.climate.sectors },
   };

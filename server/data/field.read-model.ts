@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import { gradeSchema } from '#shared/contract/grades.ts';
-import { fieldLogSchema, placementRoutes, structureWorkSchema, type FieldLog } from '#shared/contract/placements.ts';
+import type { placementRoutes} from '#shared/contract/placements.ts';
+import { fieldLogSchema, structureWorkSchema, type FieldLog } from '#shared/contract/placements.ts';
 import type { QueryOf } from '#shared/contract/route.ts';
 import { keysetPage } from './cursor.ts';
 import type { UtilityTransaction } from './database.ts';
@@ -21,13 +22,19 @@ const structureColumns = `structures.id, structures.name, lines.name as line_nam
 const structureFrom = 'structures join lines on lines.id = structures.line_id';
 
 /** Structures by name; without a search those with planned work come first. */
-export function listFieldStructures(tx: UtilityTransaction, query: QueryOf<typeof placementRoutes.listFieldStructures>) {
+export function listFieldStructures(
+  tx: UtilityTransaction,
+  query: QueryOf<typeof placementRoutes.listFieldStructures>,
+) {
   const { search } = query;
   return keysetPage(tx, query, {
     schema: structureRow,
     columns: structureColumns,
     from: structureFrom,
-    where: search === undefined ? [] : [`(structures.name ilike :search or lines.name || ' ' || structures.name ilike :search)`],
+    where:
+      search === undefined
+        ? []
+        : [`(structures.name ilike :search or lines.name || ' ' || structures.name ilike :search)`],
     bindings: search === undefined ? {} : { search: containing(search) },
     key:
       search === undefined
@@ -39,14 +46,27 @@ export function listFieldStructures(tx: UtilityTransaction, query: QueryOf<typeo
 }
 
 const spanWireRow = z.object({
-  spanWireId: z.uuid(), spanId: z.uuid(), spanLabel: z.string(), sectionId: z.uuid(), otherStructureName: z.string(),
-  spanLengthM: z.number(), side: z.enum(['from', 'to']), wireId: z.uuid(), wireName: z.string(), conductorName: z.string(),
-  grade: gradeSchema.nullable(), isStale: z.boolean(),
+  spanWireId: z.uuid(),
+  spanId: z.uuid(),
+  spanLabel: z.string(),
+  sectionId: z.uuid(),
+  otherStructureName: z.string(),
+  spanLengthM: z.number(),
+  side: z.enum(['from', 'to']),
+  wireId: z.uuid(),
+  wireName: z.string(),
+  conductorName: z.string(),
+  grade: gradeSchema.nullable(),
+  isStale: z.boolean(),
 });
 
 /** One structure with the span wires that end there and their standing dampers, or null. */
 export async function readStructureWork(tx: UtilityTransaction, structureId: string) {
-  const structure = await tx.first(structureRow, `select ${structureColumns} from ${structureFrom} where structures.id = :structureId`, { structureId });
+  const structure = await tx.first(
+    structureRow,
+    `select ${structureColumns} from ${structureFrom} where structures.id = :structureId`,
+    { structureId },
+  );
   if (structure === null) return null;
   const spanWires = await tx.rows(
     spanWireRow,
@@ -70,7 +90,9 @@ export async function readStructureWork(tx: UtilityTransaction, structureId: str
     structure,
     spanWires: spanWires.map((spanWire) => ({
       ...spanWire,
-      placements: placements.filter(({ spanWireId, side }) => spanWireId === spanWire.spanWireId && side === spanWire.side),
+      placements: placements.filter(
+        ({ spanWireId, side }) => spanWireId === spanWire.spanWireId && side === spanWire.side,
+      ),
     })),
   };
 }
@@ -95,7 +117,9 @@ async function withPlacement(tx: UtilityTransaction, row: z.infer<typeof logRow>
 }
 
 export async function findFieldLog(tx: UtilityTransaction, fieldLogId: string): Promise<FieldLog | null> {
-  const row = await tx.first(logRow, `select ${logColumns} from ${logFrom} where field_logs.id = :fieldLogId`, { fieldLogId });
+  const row = await tx.first(logRow, `select ${logColumns} from ${logFrom} where field_logs.id = :fieldLogId`, {
+    fieldLogId,
+  });
   return row === null ? null : withPlacement(tx, row);
 }
 
@@ -103,7 +127,8 @@ export async function findFieldLog(tx: UtilityTransaction, fieldLogId: string): 
 export async function listFieldLogs(tx: UtilityTransaction, query: QueryOf<typeof placementRoutes.listFieldLogs>) {
   const where: string[] = [];
   if (query.sectionId !== undefined) where.push('spans.section_id = :sectionId');
-  if (query.structureId !== undefined) where.push('(spans.from_structure_id = :structureId or spans.to_structure_id = :structureId)');
+  if (query.structureId !== undefined)
+    where.push('(spans.from_structure_id = :structureId or spans.to_structure_id = :structureId)');
   const page = await keysetPage(tx, query, {
     schema: logRow,
     columns: logColumns,

@@ -23,9 +23,14 @@ const basisJoins = `
   join bases on bases.id = assessments.basis_id`;
 const dated = { assessedAt: instantColumn };
 
-const detailRow = findingSchema.omit({ input: true }).extend({ ...dated, chunkIndex: z.number(), itemIndex: z.number() });
+const detailRow = findingSchema
+  .omit({ input: true })
+  .extend({ ...dated, chunkIndex: z.number(), itemIndex: z.number() });
 
-async function readFrozen(tx: UtilityTransaction, place: { assessmentId: string; chunkIndex: number; itemIndex: number }): Promise<FrozenCase> {
+async function readFrozen(
+  tx: UtilityTransaction,
+  place: { assessmentId: string; chunkIndex: number; itemIndex: number },
+): Promise<FrozenCase> {
   const chunk = await tx.first(
     z.object({ input: frozenChunkSchema }),
     'select input from assessment_chunks where assessment_id = :assessmentId and chunk_index = :chunkIndex',
@@ -36,7 +41,10 @@ async function readFrozen(tx: UtilityTransaction, place: { assessmentId: string;
 }
 
 /** A finding with the input it was computed from, or null. */
-export async function readFinding(tx: UtilityTransaction, findingId: string): Promise<{ finding: Finding; frozen: FrozenCase } | null> {
+export async function readFinding(
+  tx: UtilityTransaction,
+  findingId: string,
+): Promise<{ finding: Finding; frozen: FrozenCase } | null> {
   const row = await tx.first(
     detailRow,
     `select ${summaryColumns}, findings.chunk_index, findings.item_index, findings.warnings, ${spanLabel}, wires.name as wire_name,

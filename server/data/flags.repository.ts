@@ -33,7 +33,11 @@ export async function openFlagsAndAlerts(tx: UtilityTransaction, assessmentId: s
  * Plans one message per alert and safety officer, or, from `digestFromCount` alerts on, one message per officer that
  * lists them all. Returns the ids of the new deliveries. The primary key (alert, person) makes a second plan impossible.
  */
-export async function planDeliveries(tx: UtilityTransaction, assessmentId: string, digestFromCount: number): Promise<string[]> {
+export async function planDeliveries(
+  tx: UtilityTransaction,
+  assessmentId: string,
+  digestFromCount: number,
+): Promise<string[]> {
   const rows = await tx.rows(
     z.object({ id: z.uuid() }),
     `with fresh as (

@@ -60,9 +60,19 @@ export function selectSpanWires(tx: UtilityTransaction, selection: Selection): P
 }
 
 const conductorRow = z.object({
-  id: z.uuid(), name: z.string(), standard: z.string(), kind: z.string(), source: z.string(), standing: z.string(),
-  aluminiumLayerCount: z.number(), diameterM: z.number(), massKgPerM: z.number(), ratedStrengthN: z.number(),
-  bendingStiffnessMinNm2: z.number(), outerStrandDiameterM: z.number(), outerStrandModulusPa: z.number(),
+  id: z.uuid(),
+  name: z.string(),
+  standard: z.string(),
+  kind: z.string(),
+  source: z.string(),
+  standing: z.string(),
+  aluminiumLayerCount: z.number(),
+  diameterM: z.number(),
+  massKgPerM: z.number(),
+  ratedStrengthN: z.number(),
+  bendingStiffnessMinNm2: z.number(),
+  outerStrandDiameterM: z.number(),
+  outerStrandModulusPa: z.number(),
 });
 
 export function selectConductors(tx: UtilityTransaction, ids: readonly string[]) {
@@ -76,8 +86,12 @@ export function selectConductors(tx: UtilityTransaction, ids: readonly string[])
 }
 
 const placementRow = z.object({
-  placementId: z.uuid(), spanWireId: z.uuid(), side: z.enum(['from', 'to']), damperTypeId: z.uuid(),
-  distanceM: z.number(), plannedDistanceM: z.number().nullable(),
+  placementId: z.uuid(),
+  spanWireId: z.uuid(),
+  side: z.enum(['from', 'to']),
+  damperTypeId: z.uuid(),
+  distanceM: z.number(),
+  plannedDistanceM: z.number().nullable(),
 });
 
 /** As-built dampers that stand on the span wires of a selection; planned ones do not damp yet. */

@@ -21,7 +21,12 @@ const frozenConductorSchema = z.object({
   outerStrandDiameterM: z.number(),
   outerStrandModulusPa: z.number(),
 });
-const frozenDamperTypeSchema = z.object({ name: z.string(), model: damperModelSchema, source: z.string(), standing: z.string() });
+const frozenDamperTypeSchema = z.object({
+  name: z.string(),
+  model: damperModelSchema,
+  source: z.string(),
+  standing: z.string(),
+});
 const frozenPlacementSchema = z.object({
   placementId: z.uuid(),
   side: z.enum(['from', 'to']),
@@ -67,7 +72,8 @@ export interface FrozenCase {
 export function frozenCase(chunk: FrozenChunk, itemIndex: number): FrozenCase {
   const item = chunk.items[itemIndex];
   const conductor = item === undefined ? undefined : chunk.conductors[item.conductorTypeId];
-  if (item === undefined || conductor === undefined) throw new Error(`the frozen chunk has no complete item ${itemIndex}`);
+  if (item === undefined || conductor === undefined)
+    throw new Error(`the frozen chunk has no complete item ${itemIndex}`);
   const named = new Set(item.placements.map(({ damperTypeId }) => damperTypeId));
   const damperTypes = Object.fromEntries(Object.entries(chunk.damperTypes).filter(([id]) => named.has(id)));
   return { basis: chunk.basis, climate: chunk.climate, conductor, damperTypes, item };

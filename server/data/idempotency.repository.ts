@@ -33,7 +33,11 @@ export async function claimKey(
 }
 
 /** Keeps the answer of a key for a day. */
-export async function keepAnswer(tx: UtilityTransaction, key: string, answer: { status: number; body: unknown }): Promise<void> {
+export async function keepAnswer(
+  tx: UtilityTransaction,
+  key: string,
+  answer: { status: number; body: unknown },
+): Promise<void> {
   await tx.run(
     `update idempotency_keys set status = :status, response = :body::jsonb where person_id = :personId and idempotency_key = :key`,
     { key, personId: tx.actor.personId, status: answer.status, body: JSON.stringify(answer.body ?? null) },

@@ -32,7 +32,11 @@ export function listImportRuns(tx: UtilityTransaction, page: PageRequest) {
 }
 
 export function findImportProgress(tx: UtilityTransaction, importId: string) {
-  return tx.first(importProgressSchema, 'select id, state, step, done_count, total_count from import_runs where id = :importId', { importId });
+  return tx.first(
+    importProgressSchema,
+    'select id, state, step, done_count, total_count from import_runs where id = :importId',
+    { importId },
+  );
 }
 
 /** Records an upload that waits to be imported. */
@@ -45,4 +49,13 @@ export async function insertImportRun(
      values (:id, :utilityId, :fileId, :fileName, :options::jsonb, :personId)`,
     { ...run, ...tx.actor, options: JSON.stringify(run.options) },
   );
+}
+
+/** Ids of imports that should have a job. */
+export async function listLiveImports(tx: UtilityTransaction): Promise<string[]> {
+  const rows = await tx.rows(
+    z.object({ id: z.uuid() }),
+    `select id from import_runs where state in ('queued', 'running') order by created_at limit 200`,
+  );
+  return rows.map(({ id }) => id);
 }

@@ -1,5 +1,6 @@
 import { z } from 'zod';
-import { lineRoutes, lineSchema, spanListItemSchema } from '#shared/contract/lines.ts';
+import type { lineRoutes} from '#shared/contract/lines.ts';
+import { lineSchema, spanListItemSchema } from '#shared/contract/lines.ts';
 import type { QueryOf } from '#shared/contract/route.ts';
 import { keysetPage } from './cursor.ts';
 import type { UtilityTransaction } from './database.ts';
@@ -42,11 +43,16 @@ function spanConditions(query: QueryOf<typeof lineRoutes.listSpans>) {
   if (query.sectionId !== undefined) add('spans.section_id = :sectionId', { sectionId: query.sectionId });
   if (query.spanIds !== undefined) add('spans.id = any(:spanIds::uuid[])', { spanIds: query.spanIds });
   if (query.grades !== undefined) {
-    add('(select max(span_wires.grade) from span_wires where span_wires.span_id = spans.id) = any(:grades::grade[])', { grades: query.grades });
+    add('(select max(span_wires.grade) from span_wires where span_wires.span_id = spans.id) = any(:grades::grade[])', {
+      grades: query.grades,
+    });
   }
   if (query.search !== undefined) {
-    add(`(lines.name ilike :search or sections.name ilike :search
-      or first_structure.name || '–' || second_structure.name ilike :search)`, { search: containing(query.search) });
+    add(
+      `(lines.name ilike :search or sections.name ilike :search
+      or first_structure.name || '–' || second_structure.name ilike :search)`,
+      { search: containing(query.search) },
+    );
   }
   const [west, south, east, north] = query.bboxDeg ?? [];
   if (west !== undefined && south !== undefined && east !== undefined && north !== undefined) {

@@ -20,7 +20,7 @@ function boxCondition(column: string, box: Box): { condition: string; bindings: 
 }
 
 function featureOf<R extends { readonly id: string; readonly geometry: unknown }>(row: R) {
-  const { id, geometry: _geometry, ...properties } = row;
+  const { id, geometry, ...properties } = row;
   // Taken from the row, not from the pattern, so that the geometry keeps its type.
   return { type: 'Feature' as const, id, geometry: row['geometry'] as R['geometry'], properties };
 }
@@ -41,11 +41,17 @@ const worstOf = (where: string) => `
 /** Box of all structures, or null. */
 export async function readExtent(tx: UtilityTransaction): Promise<{ extentDeg: number[] | null }> {
   const row = await tx.first(
-    z.object({ west: z.number().nullable(), south: z.number().nullable(), east: z.number().nullable(), north: z.number().nullable() }),
+    z.object({
+      west: z.number().nullable(),
+      south: z.number().nullable(),
+      east: z.number().nullable(),
+      north: z.number().nullable(),
+    }),
     `select st_xmin(box) as west, st_ymin(box) as south, st_xmax(box) as east, st_ymax(box) as north
      from (select st_extent(geom) as box from sections) as all_sections`,
   );
-  if (row === null || row.west === null || row.south === null || row.east === null || row.north === null) return { extentDeg: null };
+  if (row === null || row.west === null || row.south === null || row.east === null || row.north === null)
+    return { extentDeg: null };
   return { extentDeg: [row.west, row.south, row.east, row.north] };
 }
 
@@ -54,8 +60,13 @@ export async function readMapSections(tx: UtilityTransaction, box: Box) {
   const { condition, bindings } = boxCondition('sections.geom', box);
   const rows = await tx.rows(
     z.object({
-      id: z.uuid(), geometry: lineStringSchema, ...state,
-      name: z.string(), lineId: z.uuid(), lineName: z.string(), spanCount: z.number(),
+      id: z.uuid(),
+      geometry: lineStringSchema,
+      ...state,
+      name: z.string(),
+      lineId: z.uuid(),
+      lineName: z.string(),
+      spanCount: z.number(),
     }),
     `select sections.id, st_asgeojson(sections.geom, 6)::json as geometry, worst.grade, coalesce(worst.is_stale, false) as is_stale,
        sections.is_assumed, sections.name, sections.line_id, lines.name as line_name, counted.span_count
@@ -76,8 +87,13 @@ export async function readMapSpans(tx: UtilityTransaction, box: Box) {
   const { condition, bindings } = boxCondition('spans.geom', box);
   const rows = await tx.rows(
     z.object({
-      id: z.uuid(), geometry: lineStringSchema, ...state,
-      label: z.string(), sectionId: z.uuid(), lineName: z.string(), spanLengthM: z.number(),
+      id: z.uuid(),
+      geometry: lineStringSchema,
+      ...state,
+      label: z.string(),
+      sectionId: z.uuid(),
+      lineName: z.string(),
+      spanLengthM: z.number(),
       dampers: z.array(z.object({ side: z.enum(['from', 'to']), isAsBuilt: z.boolean() })),
     }),
     `select spans.id, st_asgeojson(spans.geom, 6)::json as geometry, ${worstOf('span_wires.span_id = spans.id')},
@@ -103,8 +119,12 @@ export async function readMapStructures(tx: UtilityTransaction, box: Box) {
   const { condition, bindings } = boxCondition('structures.geom', box);
   const rows = await tx.rows(
     z.object({
-      id: z.uuid(), geometry: pointSchema, name: z.string(),
-      kind: z.enum(['dead-end', 'suspension']), lineId: z.uuid(), isAssumed: z.boolean(),
+      id: z.uuid(),
+      geometry: pointSchema,
+      name: z.string(),
+      kind: z.enum(['dead-end', 'suspension']),
+      lineId: z.uuid(),
+      isAssumed: z.boolean(),
     }),
     `select id, st_asgeojson(geom, 6)::json as geometry, name, kind, line_id, is_assumed
      from structures where ${condition} order by id limit ${maximumFeatureCount + 1}`,

@@ -3,7 +3,12 @@ import type { JobName, JobPayload } from '#shared/contract/jobs.ts';
 import type { UtilityTransaction } from './database.ts';
 
 /** A job as it waits in the outbox; it exists exactly when the change that asked for it was committed. */
-export const outboxRowSchema = z.object({ id: z.coerce.string(), jobName: z.string(), payload: z.unknown(), dedupeKey: z.string() });
+export const outboxRowSchema = z.object({
+  id: z.coerce.string(),
+  jobName: z.string(),
+  payload: z.unknown(),
+  dedupeKey: z.string(),
+});
 export type OutboxRow = z.infer<typeof outboxRowSchema>;
 
 /** Asks for a job in the transaction of the change; the same dedupe key asks once only. */

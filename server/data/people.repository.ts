@@ -48,7 +48,11 @@ export async function savePersonAtSignIn(
 }
 
 async function replaceRoles(tx: UtilityTransaction, personId: string, roles: readonly Role[]): Promise<void> {
-  const before = await tx.rows(z.object({ role: z.string() }), 'select role from person_roles where person_id = :personId', { personId });
+  const before = await tx.rows(
+    z.object({ role: z.string() }),
+    'select role from person_roles where person_id = :personId',
+    { personId },
+  );
   const held = before.map(({ role }) => role).sort();
   const stated = [...new Set(roles)].sort();
   if (held.join() === stated.join()) return;

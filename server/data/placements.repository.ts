@@ -21,7 +21,11 @@ export async function findPlacement(tx: UtilityTransaction, placementId: string)
 
 /** Placements of all span wires of a section, newest first, ended ones too. */
 export async function listSectionPlacements(tx: UtilityTransaction, sectionId: string): Promise<Placement[]> {
-  return tx.rows(rowSchema, `${select} where span_wires.section_id = :sectionId order by placements.started_at desc, placements.id`, { sectionId });
+  return tx.rows(
+    rowSchema,
+    `${select} where span_wires.section_id = :sectionId order by placements.started_at desc, placements.id`,
+    { sectionId },
+  );
 }
 
 /** Standing placements at one structure, of every span wire that ends there. */

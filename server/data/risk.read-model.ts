@@ -1,4 +1,4 @@
-import { z } from 'zod';
+import type { z } from 'zod';
 import type { QueryOf } from '#shared/contract/route.ts';
 import { riskRowSchema, type riskRoutes } from '#shared/contract/risk.ts';
 import { keysetPage, type KeysetList } from './cursor.ts';

@@ -1,6 +1,12 @@
 import { z } from 'zod';
 import { gradeRankIndex, type Grade } from '#shared/contract/grades.ts';
-import { sectionSpanSchema, sectionStructureSchema, spanWireSchema, wireSchema, type Section } from '#shared/contract/sections.ts';
+import {
+  sectionSpanSchema,
+  sectionStructureSchema,
+  spanWireSchema,
+  wireSchema,
+  type Section,
+} from '#shared/contract/sections.ts';
 import { turbulenceIntensity } from '#shared/engine/index.ts';
 import type { UtilityTransaction } from './database.ts';
 import { listSectionPlacements } from './placements.repository.ts';
@@ -8,12 +14,16 @@ import { instantColumn } from './rows.ts';
 import { listSectionWires } from './wires.repository.ts';
 
 const headSchema = z.object({
-  id: z.uuid(), name: z.string(), lineId: z.uuid(), lineName: z.string(),
-  rulingSpanM: z.number(), lengthM: z.number(), isAssumed: z.boolean(), assessedAt: instantColumn.nullable(),
+  id: z.uuid(),
+  name: z.string(),
+  lineId: z.uuid(),
+  lineName: z.string(),
+  rulingSpanM: z.number(),
+  lengthM: z.number(),
+  isAssumed: z.boolean(),
+  assessedAt: instantColumn.nullable(),
 });
-const spanRow = sectionSpanSchema
-  .omit({ turbulenceIntensityRatio: true })
-  .extend({ meanWireHeightM: z.number() });
+const spanRow = sectionSpanSchema.omit({ turbulenceIntensityRatio: true }).extend({ meanWireHeightM: z.number() });
 
 async function readHead(tx: UtilityTransaction, sectionId: string) {
   return tx.first(
@@ -76,7 +86,10 @@ function readSpanWires(tx: UtilityTransaction, sectionId: string) {
 
 function worst(grades: readonly (Grade | null)[]): Grade | null {
   const known = grades.filter((grade): grade is Grade => grade !== null);
-  return known.reduce<Grade | null>((top, grade) => (top === null || gradeRankIndex(grade) > gradeRankIndex(top) ? grade : top), null);
+  return known.reduce<Grade | null>(
+    (top, grade) => (top === null || gradeRankIndex(grade) > gradeRankIndex(top) ? grade : top),
+    null,
+  );
 }
 
 /** A section with everything its page shows, or null. */

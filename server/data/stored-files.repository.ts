@@ -18,13 +18,21 @@ export async function recordFile(tx: UtilityTransaction, file: NewFile): Promise
     { id: file.id, kind: file.kind, mediaType: file.mediaType, byteCount: file.content.length, sha256, ...tx.actor },
   );
   if (inserted === 1) return 'recorded';
-  const former = await tx.first(z.object({ contentSha256: z.string() }), 'select content_sha256 from stored_files where id = :id', { id: file.id });
+  const former = await tx.first(
+    z.object({ contentSha256: z.string() }),
+    'select content_sha256 from stored_files where id = :id',
+    { id: file.id },
+  );
   return former?.contentSha256 === sha256 ? 'same' : 'different';
 }
 
 export function findFile(tx: UtilityTransaction, fileId: string, kind: NewFile['kind']) {
-  return tx.first(z.object({ mediaType: z.string() }), 'select media_type from stored_files where id = :fileId and kind = :kind::stored_file_kind', {
-    fileId,
-    kind,
-  });
+  return tx.first(
+    z.object({ mediaType: z.string() }),
+    'select media_type from stored_files where id = :fileId and kind = :kind::stored_file_kind',
+    {
+      fileId,
+      kind,
+    },
+  );
 }

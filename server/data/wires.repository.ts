@@ -9,7 +9,9 @@ const select = `select wires.id, wires.name, wires.kind, wires.conductor_type_id
 
 /** Wires of a section: phases first, then earth wires. */
 export function listSectionWires(tx: UtilityTransaction, sectionId: string): Promise<Wire[]> {
-  return tx.rows(wireSchema, `${select} where wires.section_id = :sectionId order by wires.kind, wires.name`, { sectionId });
+  return tx.rows(wireSchema, `${select} where wires.section_id = :sectionId order by wires.kind, wires.name`, {
+    sectionId,
+  });
 }
 
 export function findWire(tx: UtilityTransaction, wireId: string): Promise<Wire | null> {

@@ -45,7 +45,11 @@ async function answer(mounted: Mounted, request: Request, response: Response): P
   }
   if (handler.kind === 'file') {
     const file = await handler.read(call);
-    response.set('Content-Disposition', 'inline').set('Cache-Control', 'private, max-age=3600').type(file.mediaType).send(file.content);
+    response
+      .set('Content-Disposition', 'inline')
+      .set('Cache-Control', 'private, max-age=3600')
+      .type(file.mediaType)
+      .send(file.content);
     return;
   }
   const run = async () => ({ status: definition.status, body: await handler.run(call) });
@@ -64,7 +68,9 @@ export function apiRouter(database: Database, handlers: Handlers): Router {
   for (const name of Object.keys(apiRoutes) as RouteName[]) {
     const definition: RouteDefinition = apiRoutes[name];
     const handler: AnyHandler = handlers[name];
-    router[definition.method](definition.path, (request, response) => answer({ name, definition, handler, database }, request, response));
+    router[definition.method](definition.path, (request, response) =>
+      answer({ name, definition, handler, database }, request, response),
+    );
   }
   return router;
 }

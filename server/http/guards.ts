@@ -15,7 +15,10 @@ export function guardAccess(definition: RouteDefinition, request: Request): void
   const person = signedIn(request);
   if (definition.access === 'signed-in') return;
   if (definition.access.some((role) => person.roles.includes(role))) return;
-  throw new AppError('not-allowed', `This needs the role ${definition.access.join(' or ')}; you hold ${person.roles.join(', ')}.`);
+  throw new AppError(
+    'not-allowed',
+    `This needs the role ${definition.access.join(' or ')}; you hold ${person.roles.join(', ')}.`,
+  );
 }
 
 function equalInConstantTime(given: string, expected: string): boolean {

@@ -15,7 +15,10 @@ export interface Call<N extends RouteName> {
   readonly request: Request;
 }
 
-type JsonHandler<N extends RouteName> = { readonly kind: 'json'; run(call: Call<N>): Promise<ResponseOf<ApiRoutes[N]>> };
+type JsonHandler<N extends RouteName> = {
+  readonly kind: 'json';
+  run(call: Call<N>): Promise<ResponseOf<ApiRoutes[N]>>;
+};
 type EventsHandler<N extends RouteName> = {
   readonly kind: 'events';
   open(call: Call<N>): Promise<(signal: AbortSignal) => AsyncIterable<ResponseOf<ApiRoutes[N]>>>;
@@ -39,6 +42,8 @@ export type AnyHandler =
 
 type RunOf<N extends RouteName> = (call: Call<N>) => Promise<ResponseOf<ApiRoutes[N]>>;
 /** Wraps a plain function as the handler of a JSON route. */
-export function json<N extends RouteName>(run: RunOf<N>): { readonly kind: 'json'; run(call: Call<N>): Promise<ResponseOf<ApiRoutes[N]>> } {
+export function json<N extends RouteName>(
+  run: RunOf<N>,
+): { readonly kind: 'json'; run(call: Call<N>): Promise<ResponseOf<ApiRoutes[N]>> } {
   return { kind: 'json', run };
 }

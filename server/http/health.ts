@@ -25,7 +25,9 @@ export function healthRouter(checks: ReadyChecks, logger: Logger): Router {
       }),
     );
     const isReady = results.every(([, state]) => state === 'ready');
-    response.status(isReady ? 200 : 503).json({ status: isReady ? 'ready' : 'not ready', checks: Object.fromEntries(results) });
+    response
+      .status(isReady ? 200 : 503)
+      .json({ status: isReady ? 'ready' : 'not ready', checks: Object.fromEntries(results) });
   });
   return router;
 }
@@ -46,7 +48,11 @@ export function metrics(): { measure: RequestHandler; expose: RequestHandler } {
       const stop = durations.startTimer();
       response.on('finish', () => {
         const route: unknown = request.route === undefined ? undefined : Reflect.get(request.route, 'path');
-        stop({ method: request.method, route: typeof route === 'string' ? route : 'other', status: response.statusCode });
+        stop({
+          method: request.method,
+          route: typeof route === 'string' ? route : 'other',
+          status: response.statusCode,
+        });
       });
       next();
     },

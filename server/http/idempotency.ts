@@ -23,7 +23,9 @@ export async function onceByKey(
   const key = keySchema.safeParse(header);
   if (!key.success) {
     const message = key.error.issues[0]?.message ?? 'is not allowed';
-    throw new AppError('invalid-input', `Idempotency-Key ${message}.`, { errors: [{ pointer: '/headers/idempotency-key', message }] });
+    throw new AppError('invalid-input', `Idempotency-Key ${message}.`, {
+      errors: [{ pointer: '/headers/idempotency-key', message }],
+    });
   }
   const requestHash = createHash('sha256').update(JSON.stringify(context.input)).digest('hex');
   const claim = { key: key.data, routeName: context.routeName, requestHash };
@@ -32,7 +34,8 @@ export async function onceByKey(
     if (former.requestHash !== requestHash || former.routeName !== context.routeName) {
       throw new AppError('idempotency-mismatch', 'This Idempotency-Key was used for another request.');
     }
-    if (former.status === null) throw new AppError('wrong-state', 'The first request with this Idempotency-Key still runs.');
+    if (former.status === null)
+      throw new AppError('wrong-state', 'The first request with this Idempotency-Key still runs.');
     return { status: former.status, body: former.response };
   }
   try {

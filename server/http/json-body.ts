@@ -5,7 +5,11 @@ import { AppError } from '#server/platform/errors.ts';
 const limitBytes = 2 * 1024 * 1024;
 
 /** Reads JSON bodies up to 2 MB. */
-export const jsonBody: RequestHandler = express.json({ limit: limitBytes, strict: false, type: ['application/json', 'application/*+json'] });
+export const jsonBody: RequestHandler = express.json({
+  limit: limitBytes,
+  strict: false,
+  type: ['application/json', 'application/*+json'],
+});
 
 const parserError = z.object({ type: z.string(), body: z.string().optional(), message: z.string() });
 
@@ -20,7 +24,8 @@ export const bodyErrors: ErrorRequestHandler = (error: unknown, _request, _respo
   const parsed = parserError.safeParse(error);
   if (!parsed.success) return next(error);
   const { type, body = '', message } = parsed.data;
-  if (type === 'entity.too.large') return next(new AppError('too-large', `The body is larger than ${limitBytes} bytes.`));
+  if (type === 'entity.too.large')
+    return next(new AppError('too-large', `The body is larger than ${limitBytes} bytes.`));
   if (type === 'charset.unsupported' || type === 'encoding.unsupported') {
     return next(new AppError('malformed-body', 'The body must be UTF-8 JSON.'));
   }
@@ -28,5 +33,9 @@ export const bodyErrors: ErrorRequestHandler = (error: unknown, _request, _respo
   const bare = fieldBeforeBareWord(body);
   if (bare === null) return next(new AppError('malformed-body', `The body is not JSON: ${message}.`));
   const text = `must be a finite number; ${bare.word} is not one`;
-  next(new AppError('malformed-body', `${bare.field} ${text}.`, { errors: [{ pointer: `/${bare.field}`, message: text }] }));
+  next(
+    new AppError('malformed-body', `${bare.field} ${text}.`, {
+      errors: [{ pointer: `/${bare.field}`, message: text }],
+    }),
+  );
 };

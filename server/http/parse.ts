@@ -33,5 +33,9 @@ export function parsePart(definition: RouteDefinition, part: Part, input: unknow
   if (parsed.success) return parsed.data;
   const errors = fieldErrors(parsed.error, input, part === 'body' ? '' : `/${part}`);
   const [first] = errors;
-  throw new AppError('invalid-input', first === undefined ? 'The request is not allowed.' : `${first.pointer}: ${first.message}.`, { errors });
+  throw new AppError(
+    'invalid-input',
+    first === undefined ? 'The request is not allowed.' : `${first.pointer}: ${first.message}.`,
+    { errors },
+  );
 }

@@ -5,7 +5,8 @@ import type { Config } from '#server/platform/config.ts';
 /** Content security policy and its kin; the tile server and the provider's sign-out are let in by name. */
 export function securityHeaders(config: Config): RequestHandler {
   const secure = config.STILLSPAN_PUBLIC_URL.startsWith('https:');
-  const tiles = config.STILLSPAN_TILE_URL === undefined ? [] : [new URL(config.STILLSPAN_TILE_URL.replace(/\{\w\}/g, 'a')).origin];
+  const tiles =
+    config.STILLSPAN_TILE_URL === undefined ? [] : [new URL(config.STILLSPAN_TILE_URL.replace(/\{\w\}/g, 'a')).origin];
   return helmet({
     contentSecurityPolicy: {
       useDefaults: false,

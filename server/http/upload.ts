@@ -15,12 +15,18 @@ export function readUpload(request: Request, limitBytes: number): Promise<Upload
     const parts: Buffer[] = [];
     let fileName: string | undefined;
     let isTooLarge = false;
-    const tooLarge = () => new AppError('too-large', `The file is larger than ${Math.round(limitBytes / 1_000_000)} MB.`);
+    const tooLarge = () =>
+      new AppError('too-large', `The file is larger than ${Math.round(limitBytes / 1_000_000)} MB.`);
     let parser;
     try {
-      parser = busboy({ headers: request.headers, limits: { files: 1, fileSize: limitBytes, fields: 10, fieldSize: 200_000 } });
+      parser = busboy({
+        headers: request.headers,
+        limits: { files: 1, fileSize: limitBytes, fields: 10, fieldSize: 200_000 },
+      });
     } catch (error) {
-      reject(new AppError('malformed-body', 'The request must be multipart/form-data with one file.', { cause: error }));
+      reject(
+        new AppError('malformed-body', 'The request must be multipart/form-data with one file.', { cause: error }),
+      );
       return;
     }
     parser.on('field', (name, value) => (fields[name] = value));
@@ -29,7 +35,9 @@ export function readUpload(request: Request, limitBytes: number): Promise<Upload
       stream.on('data', (part: Buffer) => parts.push(part));
       stream.on('limit', () => (isTooLarge = true));
     });
-    parser.on('error', (error) => reject(new AppError('malformed-body', 'The upload broke off or is malformed.', { cause: error })));
+    parser.on('error', (error) =>
+      reject(new AppError('malformed-body', 'The upload broke off or is malformed.', { cause: error })),
+    );
     parser.on('close', () => {
       if (isTooLarge) return reject(tooLarge());
       if (fileName === undefined) return reject(invalidField('/file', 'a file is required'));

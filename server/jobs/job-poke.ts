@@ -11,7 +11,9 @@ export interface JobPoke {
 /** Sends the hints over Redis; when Redis is away they are logged and the workers find the rows by themselves. */
 export function jobPoke(redis: Pick<Redis, 'publish'>, logger: Logger): JobPoke {
   const send = (channel: string, message: string) => {
-    redis.publish(channel, message).catch((error: unknown) => logger.warn({ err: error, channel }, 'hint to the workers not sent'));
+    redis
+      .publish(channel, message)
+      .catch((error: unknown) => logger.warn({ err: error, channel }, 'hint to the workers not sent'));
   };
   return {
     outboxFilled: () => send(outboxChannel, ''),

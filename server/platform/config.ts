@@ -28,7 +28,6 @@ const configSchema = z.object({
   STILLSPAN_FORECAST_URL: httpUrl.optional(),
   STILLSPAN_LOG_LEVEL: z.enum(['fatal', 'error', 'warn', 'info', 'debug', 'trace', 'silent']).default('info'),
   STILLSPAN_WORKER_CONCURRENCY: z.coerce.number().int().min(1).max(32).default(2),
-  STILLSPAN_WORKER_METRICS_PORT: port.optional(),
   STILLSPAN_TRUST_PROXY: z.enum(['true', 'false']).default('false'),
 });
 
@@ -48,14 +47,18 @@ function shownValue(key: string, value: string | undefined): string {
 
 /** Reads the environment once; empty values count as not set. */
 export function loadConfig(environment: Record<string, string | undefined> = process.env): Config {
-  const given = Object.fromEntries(configKeys.map((key) => [key, environment[key] === '' ? undefined : environment[key]]));
+  const given = Object.fromEntries(
+    configKeys.map((key) => [key, environment[key] === '' ? undefined : environment[key]]),
+  );
   const parsed = configSchema.safeParse(given);
   if (parsed.success) return Object.freeze(parsed.data);
   const lines = parsed.error.issues.map((issue) => {
     const key = String(issue.path[0]);
     return `  ${key} (${shownValue(key, environment[key])}): ${issue.message}`;
   });
-  throw new ConfigError(`Settings that stop the start:\n${lines.join('\n')}\nThe table in README.md lists every setting.`);
+  throw new ConfigError(
+    `Settings that stop the start:\n${lines.join('\n')}\nThe table in README.md lists every setting.`,
+  );
 }
 
 /** Address of the database as its owner; only migrations and the first set-up of a utility use it. */

@@ -11,7 +11,8 @@ export interface FileStore {
 
 /** Files below one directory, one folder a utility. Names are ids only, so that no path can be smuggled in. */
 export function openFileStore(directory: string): FileStore {
-  const place = (utilityId: string, fileId: string) => join(directory, z.uuid().parse(utilityId), z.uuid().parse(fileId));
+  const place = (utilityId: string, fileId: string) =>
+    join(directory, z.uuid().parse(utilityId), z.uuid().parse(fileId));
   return {
     write: async (utilityId, fileId, content) => {
       const target = place(utilityId, fileId);

@@ -14,7 +14,12 @@ const lanePayload = z.strictObject({
   laneIndex: z.number().int().min(0).describe('Lanes of one assessment share its chunks; any worker may run any lane'),
 });
 
+/** Queues keep work of a kind together, so that mail does not wait behind computing. */
+export const queueNames = ['computing', 'importing', 'mailing'] as const;
+export type QueueName = (typeof queueNames)[number];
+
 interface JobContract {
+  readonly queue: QueueName;
   readonly payload: z.ZodType;
   readonly attemptCount: number;
   readonly backoffMs: number;
@@ -22,15 +27,20 @@ interface JobContract {
 
 /** Every job: its payload (ids only, the handler reads the rows) and how often it is tried. */
 export const jobContracts = {
-  'run-assessment': { payload: rowPayload('assessmentId'), attemptCount: 5, backoffMs: 1000 },
-  'compute-chunks': { payload: lanePayload, attemptCount: 5, backoffMs: 1000 },
-  'run-import': { payload: rowPayload('importId'), attemptCount: 2, backoffMs: 1000 },
-  'send-mail': { payload: rowPayload('deliveryId'), attemptCount: 8, backoffMs: 2000 },
+  'run-assessment': { queue: 'computing', payload: rowPayload('assessmentId'), attemptCount: 5, backoffMs: 1000 },
+  'compute-chunks': { queue: 'computing', payload: lanePayload, attemptCount: 5, backoffMs: 1000 },
+  'run-import': { queue: 'importing', payload: rowPayload('importId'), attemptCount: 2, backoffMs: 1000 },
+  'send-mail': { queue: 'mailing', payload: rowPayload('deliveryId'), attemptCount: 8, backoffMs: 2000 },
 } as const satisfies Record<string, JobContract>;
 
 export type JobName = keyof typeof jobContracts;
 export type JobPayload<N extends JobName> = z.infer<(typeof jobContracts)[N]['payload']>;
-export const jobNames = ['run-assessment', 'compute-chunks', 'run-import', 'send-mail'] as const satisfies readonly JobName[];
+export const jobNames = [
+  'run-assessment',
+  'compute-chunks',
+  'run-import',
+  'send-mail',
+] as const satisfies readonly JobName[];
 
 /** Redis channel that carries progress of one row; what is sent is advisory, the row is the truth. */
 export function progressChannel(kind: 'assessment' | 'import', id: string): string {

@@ -53,7 +53,11 @@ export const reasonSchema = z.discriminatedUnion('code', [
     offsetM: z.number(),
   }),
   z.object({ code: z.literal('amplitude-limit'), frequencyHz: z.number(), windSpeedMPerS: z.number() }),
-  z.object({ code: z.literal('no-damper-data'), frequencyLowerHz: z.number(), frequencyUpperHz: z.number() }),
+  z.object({
+    code: z.literal('no-damper-data'),
+    frequencyLowerHz: z.number().describe('Lower end of the band that the damper tables cover'),
+    frequencyUpperHz: z.number().describe('Upper end of the band that the damper tables cover'),
+  }),
   z.object({ code: z.literal('quiet') }),
   z.object({ code: z.literal('assumed-input') }),
 ]);

@@ -6,7 +6,9 @@ import { alertService } from './alerts.service.ts';
 export const alertHandlers = (deps: Pick<Deps, 'database'>) => {
   const service = alertService(deps);
   return {
-    listAlerts: json<'listAlerts'>(({ actor, query }) => deps.database.withUtility(actor, (tx) => listAlerts(tx, query))),
+    listAlerts: json<'listAlerts'>(({ actor, query }) =>
+      deps.database.withUtility(actor, (tx) => listAlerts(tx, query)),
+    ),
     acknowledgeAlert: json<'acknowledgeAlert'>(({ actor, params, body }) =>
       service.move(actor, { alertId: params.alertId, to: 'acknowledged', note: body.note }),
     ),

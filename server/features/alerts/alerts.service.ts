@@ -22,7 +22,13 @@ export const alertService = ({ database }: Pick<Deps, 'database'>) => ({
       const after = await findAlert(tx, alertId);
       if (after === null) throw notFound('alert', alertId);
       const action = to === 'acknowledged' ? 'acknowledge' : 'close';
-      await writeAudit(tx, { action, thingKind: 'alert', thingId: alertId, before: { state: before.state, note: before.note }, after: { state: after.state, note: after.note } });
+      await writeAudit(tx, {
+        action,
+        thingKind: 'alert',
+        thingId: alertId,
+        before: { state: before.state, note: before.note },
+        after: { state: after.state, note: after.note },
+      });
       return after;
     }),
 });

@@ -8,7 +8,9 @@ export const assessmentHandlers = (deps: Pick<Deps, 'database' | 'jobs' | 'progr
   const { database, progress } = deps;
   const service = assessmentService(deps);
   return {
-    listAssessments: json<'listAssessments'>(({ actor, query }) => database.withUtility(actor, (tx) => listAssessments(tx, query))),
+    listAssessments: json<'listAssessments'>(({ actor, query }) =>
+      database.withUtility(actor, (tx) => listAssessments(tx, query)),
+    ),
     createAssessment: json<'createAssessment'>(({ actor, body }) => service.create(actor, body)),
     getAssessment: json<'getAssessment'>(({ actor, params }) => service.get(actor, params.assessmentId)),
     listAssessmentFindings: json<'listAssessmentFindings'>(({ actor, params, query }) =>

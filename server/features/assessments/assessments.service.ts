@@ -20,7 +20,10 @@ type AssessmentInput = z.infer<typeof assessmentInputSchema>;
 async function basisOf(tx: UtilityTransaction, basisId: string | undefined) {
   const basis = basisId === undefined ? await findDefaultBasis(tx) : await findBasis(tx, basisId);
   if (basis !== null) return basis;
-  throw invalidField('/basisId', basisId === undefined ? 'is required: the utility has no default basis' : 'is not a basis of this utility');
+  throw invalidField(
+    '/basisId',
+    basisId === undefined ? 'is required: the utility has no default basis' : 'is not a basis of this utility',
+  );
 }
 
 async function readOrRefuse(tx: UtilityTransaction, assessmentId: string): Promise<Assessment> {
@@ -39,13 +42,21 @@ async function create(tx: UtilityTransaction, input: AssessmentInput): Promise<A
   const basis = await basisOf(tx, input.basisId);
   const { namedCount, foundCount } = await countSelection(tx, input.selection);
   if (foundCount < namedCount) {
-    throw invalidField('/selection', `${namedCount - foundCount} of the ${namedCount} picked things are not in this utility's lines`);
+    throw invalidField(
+      '/selection',
+      `${namedCount - foundCount} of the ${namedCount} picked things are not in this utility's lines`,
+    );
   }
   const id = input.id ?? randomUUID();
   const title = input.title === '' ? `${basis.name} v${basis.versionNumber}` : input.title;
   await insertAssessment(tx, { id, title, basisId: basis.id, selection: input.selection, cause: 'engineer' });
   await askForJob(tx, runJob(tx.actor.utilityId, id, 'first'));
-  await writeAudit(tx, { action: 'create', thingKind: 'assessment', thingId: id, after: { title, basisId: basis.id, selectionKind: input.selection.kind } });
+  await writeAudit(tx, {
+    action: 'create',
+    thingKind: 'assessment',
+    thingId: id,
+    after: { title, basisId: basis.id, selectionKind: input.selection.kind },
+  });
   return readOrRefuse(tx, id);
 }
 
@@ -72,7 +83,11 @@ export const assessmentService = ({ database, jobs }: Pick<Deps, 'database' | 'j
     const queued = await database.withUtility(actor, async (tx) => {
       const before = await readOrRefuse(tx, assessmentId);
       if (!(await requeueAssessment(tx, assessmentId))) {
-        throw new AppError('wrong-state', `Only a failed or cancelled assessment can go on; this one is ${before.state}.`, { current: before });
+        throw new AppError(
+          'wrong-state',
+          `Only a failed or cancelled assessment can go on; this one is ${before.state}.`,
+          { current: before },
+        );
       }
       await askForJob(tx, runJob(tx.actor.utilityId, assessmentId, randomUUID()));
       await writeAudit(tx, { action: 'retry', thingKind: 'assessment', thingId: assessmentId });

@@ -1,5 +1,5 @@
 import type { Finding, FindingSeries } from '#shared/contract/findings.ts';
-import { ENGINE_VERSION, spanWireProfile, spanWireSeries } from '#shared/engine/index.ts';
+import { ENGINE_VERSION, spanWireProfile, spanWireSeries, type SpanSeriesRow } from '#shared/engine/index.ts';
 import type { Actor } from '#server/data/database.ts';
 import { engineBasisOf, engineCaseOf, limitsOf } from '#server/data/engine-case.ts';
 import { readFinding } from '#server/data/findings.read-model.ts';
@@ -9,20 +9,43 @@ import type { Deps } from '../deps.ts';
 
 const profilePointCount = 241;
 
+function rowOf(row: SpanSeriesRow): FindingSeries['rows'][number] {
+  return {
+    frequencyHz: row.frequencyHz,
+    windSpeedMPerS: row.windSpeedMPerS,
+    outcome: row.outcome,
+    midAmplitudeM: row.midAmplitudeM,
+    clampStressPa: [...row.clampStressPa],
+    reflectionRatio: [...row.endReflectionRatio],
+    windPowerW: row.windPowerW,
+    selfDampingPowerW: row.selfDampingPowerW,
+    endPowerW: [...row.endPowerW],
+  };
+}
+
 function seriesOf(finding: Finding, frozen: FrozenCase, frequencyHz: number | null): FindingSeries {
   const input = engineCaseOf(frozen);
   const basis = engineBasisOf(frozen);
   const { rows } = spanWireSeries(input, basis);
   const limits = limitsOf(frozen);
   const at = frequencyHz ?? finding.frequencyHz;
-  const profile = at === null ? null : spanWireProfile(input, basis, { frequencyHz: at, pointCount: profilePointCount });
+  const profile =
+    at === null ? null : spanWireProfile(input, basis, { frequencyHz: at, pointCount: profilePointCount });
   return {
     findingId: finding.id,
     limitStressPa: limits.enduranceStressPa,
     limitSource: limits.enduranceSource,
     damperedLimitStressPa: limits.damperedStressPa,
-    rows,
-    profile: profile === null || profile.outcome !== 'steady' ? null : { frequencyHz: profile.frequencyHz, positionsM: [...profile.positionsM], amplitudesM: [...profile.amplitudesM], fluxesW: [...profile.fluxesW] },
+    rows: rows.map(rowOf),
+    profile:
+      profile === null || profile.outcome !== 'steady'
+        ? null
+        : {
+            frequencyHz: profile.frequencyHz,
+            positionsM: [...profile.positionsM],
+            amplitudesM: [...profile.amplitudesM],
+            fluxesW: [...profile.fluxesW],
+          },
     isReproduced: finding.engineVersion === ENGINE_VERSION,
   };
 }

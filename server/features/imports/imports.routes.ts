@@ -8,7 +8,9 @@ export const importHandlers = (deps: Pick<Deps, 'database' | 'files' | 'jobs' | 
   const service = importService(deps);
   return {
     createImport: json<'createImport'>(({ actor, request }) => service.create(actor, request)),
-    listImports: json<'listImports'>(({ actor, query }) => database.withUtility(actor, (tx) => listImportRuns(tx, query))),
+    listImports: json<'listImports'>(({ actor, query }) =>
+      database.withUtility(actor, (tx) => listImportRuns(tx, query)),
+    ),
     getImport: json<'getImport'>(({ actor, params }) => service.get(actor, params.importId)),
     watchImport: {
       kind: 'events' as const,

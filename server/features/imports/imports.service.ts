@@ -18,15 +18,23 @@ function optionsOf(upload: Upload): ImportOptions {
   try {
     given = JSON.parse(upload.fields['options'] ?? '');
   } catch (error) {
-    throw new AppError('invalid-input', 'The part "options" must be JSON.', { cause: error, errors: [{ pointer: '/options', message: 'must be JSON' }] });
+    throw new AppError('invalid-input', 'The part "options" must be JSON.', {
+      cause: error,
+      errors: [{ pointer: '/options', message: 'must be JSON' }],
+    });
   }
   const parsed = importOptionsSchema.safeParse(given);
   if (!parsed.success) {
     const errors = fieldErrors(parsed.error, given, '/options');
-    throw new AppError('invalid-input', errors.map(({ pointer, message }) => `${pointer}: ${message}`).join('; '), { errors });
+    throw new AppError('invalid-input', errors.map(({ pointer, message }) => `${pointer}: ${message}`).join('; '), {
+      errors,
+    });
   }
   if (parsed.data.kind === 'centre-line' && parsed.data.assumptions === undefined) {
-    throw invalidField('/options/assumptions', 'is required for a centre-line file: spans, wires and tensions must be assumed by somebody');
+    throw invalidField(
+      '/options/assumptions',
+      'is required for a centre-line file: spans, wires and tensions must be assumed by somebody',
+    );
   }
   return parsed.data;
 }
@@ -62,7 +70,12 @@ export const importService = ({ database, files, jobs }: Pick<Deps, 'database' |
       await insertImportRun(tx, { id: importId, fileId, fileName: upload.fileName.slice(0, 255) || 'upload', options });
       const payload = { payloadVersion: 1 as const, utilityId: actor.utilityId, importId };
       await askForJob(tx, { name: 'run-import', payload, dedupeKey: `run-import-${importId}` });
-      await writeAudit(tx, { action: 'upload', thingKind: 'import', thingId: importId, after: { fileName: upload.fileName, options } });
+      await writeAudit(tx, {
+        action: 'upload',
+        thingKind: 'import',
+        thingId: importId,
+        after: { fileName: upload.fileName, options },
+      });
       const run = await findImportRun(tx, importId);
       if (run === null) throw notFound('import', importId);
       return run;

@@ -1,4 +1,10 @@
-import { readExtent, readMapSections, readMapSpans, readMapStructures, readMapTerrain } from '#server/data/map.read-model.ts';
+import {
+  readExtent,
+  readMapSections,
+  readMapSpans,
+  readMapStructures,
+  readMapTerrain,
+} from '#server/data/map.read-model.ts';
 import { json } from '#server/http/handler.ts';
 import type { Deps } from '../deps.ts';
 
@@ -7,7 +13,9 @@ export const mapHandlers = ({ database }: Pick<Deps, 'database'>) => ({
   getMapSections: json<'getMapSections'>(({ actor, query }) =>
     database.withUtility(actor, (tx) => readMapSections(tx, query.bboxDeg)),
   ),
-  getMapSpans: json<'getMapSpans'>(({ actor, query }) => database.withUtility(actor, (tx) => readMapSpans(tx, query.bboxDeg))),
+  getMapSpans: json<'getMapSpans'>(({ actor, query }) =>
+    database.withUtility(actor, (tx) => readMapSpans(tx, query.bboxDeg)),
+  ),
   getMapStructures: json<'getMapStructures'>(({ actor, query }) =>
     database.withUtility(actor, (tx) => readMapStructures(tx, query.bboxDeg)),
   ),

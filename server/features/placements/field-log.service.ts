@@ -73,12 +73,26 @@ async function log(tx: UtilityTransaction, input: FieldLogInput): Promise<FieldL
   if (formerHash === null) {
     const gradeBefore = await readGrade(tx, input.spanWireId);
     const placement = await fit(tx, input);
-    await markStale(tx, { kind: 'span-wire', spanWireId: input.spanWireId }, 'A damper was fitted since the assessment');
+    await markStale(
+      tx,
+      { kind: 'span-wire', spanWireId: input.spanWireId },
+      'A damper was fitted since the assessment',
+    );
     const assessmentId = await reassess(tx, input, placement);
-    await insertFieldLog(tx, { id: input.id, placementId: placement.id, fittedAt: input.fittedAt, gradeBefore, assessmentId, requestHash });
+    await insertFieldLog(tx, {
+      id: input.id,
+      placementId: placement.id,
+      fittedAt: input.fittedAt,
+      gradeBefore,
+      assessmentId,
+      requestHash,
+    });
     await writeAudit(tx, { action: 'log', thingKind: 'placement', thingId: placement.id, after: placement });
   } else if (formerHash !== requestHash) {
-    throw new AppError('duplicate', 'A field log with this id exists and says something else. Log it again as a new one.');
+    throw new AppError(
+      'duplicate',
+      'A field log with this id exists and says something else. Log it again as a new one.',
+    );
   }
   const saved = await findFieldLog(tx, input.id);
   if (saved === null) throw notFound('field log', input.id);

@@ -15,9 +15,13 @@ export const photoService = ({ database, files }: Pick<Deps, 'database' | 'files
     // What the bytes are decides, not what the name or header says.
     const found = await fileTypeFromBuffer(content);
     if (found === undefined || !photoTypes.has(found.mime)) {
-      throw new AppError('unsupported-file', 'A photo must be JPEG, PNG or WebP.', { errors: [{ pointer: '/file', message: 'must be JPEG, PNG or WebP' }] });
+      throw new AppError('unsupported-file', 'A photo must be JPEG, PNG or WebP.', {
+        errors: [{ pointer: '/file', message: 'must be JPEG, PNG or WebP' }],
+      });
     }
-    const outcome = await database.withUtility(actor, (tx) => recordFile(tx, { id: fileId, kind: 'photo', mediaType: found.mime, content }));
+    const outcome = await database.withUtility(actor, (tx) =>
+      recordFile(tx, { id: fileId, kind: 'photo', mediaType: found.mime, content }),
+    );
     if (outcome === 'different') throw new AppError('duplicate', 'Another photo was uploaded under this id.');
     await files.write(actor.utilityId, fileId, content);
     return { id: fileId, byteCount: content.length };

@@ -17,14 +17,18 @@ export const placementHandlers = (deps: Pick<Deps, 'database' | 'jobs' | 'files'
       await placements.withdraw(actor, params.placementId, version ?? 0);
       return null;
     }),
-    listFieldStructures: json<'listFieldStructures'>(({ actor, query }) => database.withUtility(actor, (tx) => listFieldStructures(tx, query))),
+    listFieldStructures: json<'listFieldStructures'>(({ actor, query }) =>
+      database.withUtility(actor, (tx) => listFieldStructures(tx, query)),
+    ),
     getFieldStructure: json<'getFieldStructure'>(async ({ actor, params: { structureId } }) => {
       const work = await database.withUtility(actor, (tx) => readStructureWork(tx, structureId));
       if (work === null) throw notFound('structure', structureId);
       return work;
     }),
     createFieldLog: json<'createFieldLog'>(({ actor, body }) => logs.create(actor, body)),
-    listFieldLogs: json<'listFieldLogs'>(({ actor, query }) => database.withUtility(actor, (tx) => listFieldLogs(tx, query))),
+    listFieldLogs: json<'listFieldLogs'>(({ actor, query }) =>
+      database.withUtility(actor, (tx) => listFieldLogs(tx, query)),
+    ),
     uploadPhoto: json<'uploadPhoto'>(({ actor, params, request }) => photos.upload(actor, params.fileId, request)),
     getPhoto: {
       kind: 'file' as const,

@@ -23,7 +23,10 @@ export async function checkPlace(
   if (bounds === null) throw notFound('span wire', place.spanWireId);
   const middleM = bounds.spanLengthM / 2;
   if (place.distanceM >= middleM) {
-    throw invalidField('/distanceM', `must be below ${middleM.toFixed(1)} m, the middle of the span: log it from the other end (got ${place.distanceM})`);
+    throw invalidField(
+      '/distanceM',
+      `must be below ${middleM.toFixed(1)} m, the middle of the span: log it from the other end (got ${place.distanceM})`,
+    );
   }
   if (await isDistanceTaken(tx, place)) {
     throw new AppError('duplicate', `A damper stands at ${place.distanceM} m already on this side.`, {
@@ -61,7 +64,11 @@ export const placementService = ({ database }: Pick<Deps, 'database'>) => ({
     database.withUtility(actor, async (tx) => {
       const before = await findPlacement(tx, placementId);
       if (before === null) throw notFound('placement', placementId);
-      if (before.state !== 'planned') throw new AppError('wrong-state', 'Only planned dampers can be withdrawn; a fitted one is replaced by a field log.');
+      if (before.state !== 'planned')
+        throw new AppError(
+          'wrong-state',
+          'Only planned dampers can be withdrawn; a fitted one is replaced by a field log.',
+        );
       await endPlacement(tx, { id: placementId, endedAt: new Date().toISOString(), versionNumber });
       await writeAudit(tx, { action: 'withdraw', thingKind: 'placement', thingId: placementId, before });
     }),

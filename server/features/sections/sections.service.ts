@@ -18,16 +18,24 @@ async function editWire(tx: UtilityTransaction, { wireId, versionNumber, patch }
   const before = await findWire(tx, wireId);
   if (before === null) throw notFound('wire', wireId);
   const stale = (current: Wire) =>
-    new AppError('stale-version', 'Somebody changed this wire since you read it. Both versions are here; decide and save again.', { current, submitted: patch });
+    new AppError(
+      'stale-version',
+      'Somebody changed this wire since you read it. Both versions are here; decide and save again.',
+      { current, submitted: patch },
+    );
   if (before.versionNumber !== versionNumber) throw stale(before);
   const tensionN = patch.tensionN ?? before.tensionN;
   const conductorTypeId = patch.conductorTypeId ?? before.conductorTypeId;
   const ratedStrengthN = await findRatedStrengthN(tx, conductorTypeId);
   if (ratedStrengthN === null) throw invalidField('/conductorTypeId', 'is not in the conductor catalogue');
   if (tensionN > ratedStrengthN) {
-    throw invalidField('/tensionN', `must be below the rated strength of the conductor, ${Math.round(ratedStrengthN)} N (got ${tensionN})`);
+    throw invalidField(
+      '/tensionN',
+      `must be below the rated strength of the conductor, ${Math.round(ratedStrengthN)} N (got ${tensionN})`,
+    );
   }
-  if (!(await updateWire(tx, { id: wireId, versionNumber, tensionN, conductorTypeId }))) throw stale((await findWire(tx, wireId)) ?? before);
+  if (!(await updateWire(tx, { id: wireId, versionNumber, tensionN, conductorTypeId })))
+    throw stale((await findWire(tx, wireId)) ?? before);
   const after = await findWire(tx, wireId);
   if (after === null) throw notFound('wire', wireId);
   await markStale(tx, { kind: 'wire', wireId }, 'Conductor or tension of the wire was changed');

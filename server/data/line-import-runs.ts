@@ -73,29 +73,3 @@ export async function endImportRun(tx: UtilityTransaction, importId: string, end
   );
   return endedCount > 0;
 }
-
-interface NewImportRun {
-  readonly id: string;
-  readonly fileId: string;
-  readonly fileName: string;
-  readonly mediaType: string;
-  readonly byteCount: number;
-  readonly contentSha256: string;
-  readonly options: z.infer<typeof importOptionsSchema>;
-}
-
-/** Stores an import that waits, with the record of its file; the content itself is in the file store already. */
-export async function createImportRun(tx: UtilityTransaction, run: NewImportRun): Promise<void> {
-  const { utilityId, personId } = tx.actor;
-  const { id, fileId, fileName, mediaType, byteCount, contentSha256, options } = run;
-  await tx.run(
-    `insert into stored_files (id, utility_id, kind, media_type, byte_count, content_sha256, created_by_person_id)
-     values (:fileId, :utilityId, 'import', :mediaType, :byteCount, :contentSha256, :personId)`,
-    { fileId, utilityId, mediaType, byteCount, contentSha256, personId },
-  );
-  await tx.run(
-    `insert into import_runs (id, utility_id, file_id, file_name, options, created_by_person_id)
-     values (:id, :utilityId, :fileId, :fileName, :options::jsonb, :personId)`,
-    { id, utilityId, fileId, fileName, options: JSON.stringify(options), personId },
-  );
-}

@@ -144,7 +144,7 @@ describe('joining parts', () => {
 
 describe('a bad centre line', () => {
   const good: readonly (readonly Pair[])[] = [[at(0, 0), at(1000, 0)]];
-  it.each([
+  it.each<[string, readonly object[], string, string]>([
     ['a negative voltage', [lineFeature(good, { voltage_kv: -110 })], 'voltage_kv', 'negative'],
     [
       'a voltage that no class covers',
@@ -157,7 +157,7 @@ describe('a bad centre line', () => {
     ['crossed coordinates', [lineFeature([[[-38.5, 174], at(0, 0)]])], 'geometry part 1, point 1', 'crossed'],
     ['a polygon', [{ ...lineFeature(good), geometry: { type: 'Polygon', coordinates: [] } }], 'geometry', 'LineString'],
     ['no geometry', [{ ...lineFeature(good), geometry: null }], 'geometry', 'LineString'],
-  ])('%s', (_name, features, field, part) => {
+  ])('%s', (_name, features, ...[field, part]) => {
     const { issues } = check(collection(...features));
     expect(issues.errors).toMatchObject([{ row: 1, field, message: expect.stringContaining(part) }]);
   });

@@ -273,7 +273,7 @@ describe('surveyed GeoJSON', () => {
     ],
     ['a structure without a point', good.replace('"Point"', '"LineString"'), 'geometry', 'needs a Point'],
     ['a thing that is no feature', good.replace('[{', '[7,{'), 'type', 'GeoJSON Feature'],
-  ])('refuses %s', (_name, content, field, part) => {
+  ])('refuses %s', (_name, content, ...[field, part]) => {
     expect(onlyError(content, 'geojson')).toMatchObject({ field, message: expect.stringContaining(part) });
   });
 

@@ -9,6 +9,10 @@ describe('chosenSpanWire', () => {
     expect(chosenSpanWire(section, { span: anId(22), wire: anId(32) })?.id).toBe(anId(44));
   });
 
+  it('takes the id of the span wire for the wire as well', () => {
+    expect(chosenSpanWire(section, { span: anId(22), wire: anId(44) })?.id).toBe(anId(44));
+  });
+
   it('opens at the worst span wire when nothing is asked', () => {
     expect(chosenSpanWire(section, { span: null, wire: null })?.id).toBe(anId(41));
   });

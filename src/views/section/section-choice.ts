@@ -9,6 +9,7 @@ export type SectionTab = (typeof sectionTabs)[number];
 /** What the address asks to see; each part may be left out or be out of date. */
 export interface AskedChoice {
   readonly span: string | null;
+  /** Id of a wire, or of the span wire itself: lists know the one, messages the other. */
   readonly wire: string | null;
 }
 
@@ -24,7 +25,8 @@ function isWorse(one: SpanWire, other: SpanWire): boolean {
  */
 export function chosenSpanWire(section: Section, asked: AskedChoice): SpanWire | null {
   const fits = (spanWire: SpanWire, parts: AskedChoice) =>
-    (parts.span === null || spanWire.spanId === parts.span) && (parts.wire === null || spanWire.wireId === parts.wire);
+    (parts.span === null || spanWire.spanId === parts.span) &&
+    (parts.wire === null || spanWire.wireId === parts.wire || spanWire.id === parts.wire);
   const attempts: AskedChoice[] = [asked, { span: asked.span, wire: null }, { span: null, wire: null }];
   for (const attempt of attempts) {
     const candidates = section.spanWires.filter((spanWire) => fits(spanWire, attempt));

@@ -6,7 +6,7 @@ import { withAlpha } from './chart-palette.ts';
 
 const stackFillAlpha = 0.28;
 const markerEveryCount = 8;
-const axisFont = { family: 'Roboto', size: 12 };
+const axisFont = { family: 'Roboto, sans-serif', size: 12 };
 
 function datasetOf(series: ChartSeries, index: number, context: DatasetContext): ChartDataset<'line'> {
   const colour = context.palette.tones[series.tone];
@@ -55,6 +55,8 @@ function scaleOf(axis: ChartAxis, palette: ChartPalette) {
       font: axisFont,
       maxTicksLimit: 8,
       maxRotation: 0,
+      // The ends of a wind band are odd numbers that crowd the round ones.
+      includeBounds: false,
       callback: (value: string | number) => axis.format(Number(value)),
     },
     grid: { color: withAlpha(palette.quiet, 0.25), tickColor: palette.quiet },
@@ -69,7 +71,7 @@ function highestLimit(model: ChartModel): number | undefined {
 
 function scalesOf(model: ChartModel, palette: ChartPalette): NonNullable<ChartOptions<'line'>['scales']> {
   const [lower, upper] = xExtent(model) ?? [0, 1];
-  const highest = model.yAxis.upper ?? highestLimit(model);
+  const highest = highestLimit(model);
   const second = model.secondXAxis;
   const isStacked = model.series.some((series) => series.isStacked);
   return {
@@ -78,6 +80,7 @@ function scalesOf(model: ChartModel, palette: ChartPalette): NonNullable<ChartOp
       ...scaleOf(model.yAxis, palette),
       stacked: isStacked,
       ...(model.yAxis.lower === undefined ? {} : { min: model.yAxis.lower }),
+      ...(model.yAxis.upper === undefined ? {} : { max: model.yAxis.upper }),
       ...(highest === undefined ? {} : { suggestedMax: highest }),
     },
     ...(second === undefined

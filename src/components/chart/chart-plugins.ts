@@ -111,9 +111,9 @@ function drawLimitLines(drawing: Drawing, model: ChartModel, palette: ChartPalet
     context.moveTo(area.left, y);
     context.lineTo(area.right, y);
     context.stroke();
-    context.textAlign = 'left';
+    context.textAlign = 'right';
     const labelY = y - 5 < area.top + labelHeightPx ? y + labelHeightPx : y - 5;
-    drawLabel(drawing, limit.label, { x: area.left + 6, y: labelY, ink: palette.limit, paper: palette.paper });
+    drawLabel(drawing, limit.label, { x: area.right - 6, y: labelY, ink: palette.limit, paper: palette.paper });
     context.restore();
   });
 }

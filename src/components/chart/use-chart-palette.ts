@@ -13,7 +13,11 @@ export function useChartPalette(element: Readonly<Ref<HTMLElement | null>>): Rea
   function read(): void {
     if (element.value !== null) palette.value = readChartPalette(element.value);
   }
-  onMounted(read);
+  onMounted(() => {
+    read();
+    // Letters drawn before the typeface has come stay in the substitute until the next drawing.
+    void document.fonts?.load('12px Roboto').then(read);
+  });
   useMutationObserver([document.documentElement, document.body], read, {
     attributes: true,
     attributeFilter: ['class', 'data-theme'],

@@ -6,9 +6,13 @@ export type { EngineWarning, MethodNote, MethodStanding } from './methods/method
 export type { EndPair, SpanOutcome, SpanRow } from './span/span-row.ts';
 export { ENGINE_VERSION } from './version.ts';
 export { assessSpanWire } from './assessment/assess-span-wire.ts';
+export { createEndResponseCache } from './assessment/end-response-cache.ts';
 export type { EndResponseCache } from './assessment/end-response-cache.ts';
+export type { ClimateSector, WindClimate } from './climate/wind-climate.ts';
 export { spanWireProfile } from './assessment/span-wire-profile.ts';
 export type { ProfileRequest } from './assessment/span-wire-profile.ts';
 export { spanWireSeries } from './assessment/span-wire-series.ts';
 export { EngineInputError } from './numerics/engine-input-error.ts';
 export { turbulenceIntensity } from './wind/turbulence-intensity.ts';
+export type { UserCurves } from './methods/user-curves.ts';
+export type { WireProperties } from './span/wire-properties.ts';

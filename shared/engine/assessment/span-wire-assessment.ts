@@ -1,18 +1,10 @@
+import type { WindClimate } from '../climate/wind-climate.ts';
 import type { SpanEnd } from '../ends/span-end.ts';
 import type { PartialMethodChoice } from '../methods/method-choice.ts';
 import type { EngineWarning, MethodNote } from '../methods/method-note.ts';
+import type { UserCurves } from '../methods/user-curves.ts';
 import type { EndPair, SpanOutcome, SpanRow } from '../span/span-row.ts';
-
-/** What the engine must know of a wire. */
-export interface WireProperties {
-  readonly diameterM: number;
-  readonly massKgPerM: number;
-  readonly ratedStrengthN: number;
-  /** Bending stiffness with all strands sliding freely. */
-  readonly bendingStiffnessMinNm2: number;
-  readonly outerStrandDiameterM: number;
-  readonly outerStrandModulusPa: number;
-}
+import type { WireProperties } from '../span/wire-properties.ts';
 
 /** Everything that one span wire needs; plain JSON, kept with the result. */
 export interface SpanWireCase {
@@ -23,25 +15,13 @@ export interface SpanWireCase {
   readonly ends: readonly [SpanEnd, SpanEnd];
 }
 
-/** Share of time and Weibull distribution of the wind that comes from one direction. */
-export interface ClimateSector {
-  /** Direction the wind comes from, from true north. */
-  readonly directionRad: number;
-  readonly shareRatio: number;
-  readonly weibullScaleMPerS: number;
-  readonly weibullShapeNumber: number;
-}
-
-/** Wind climate by direction sectors. */
-export interface WindClimate {
-  readonly sectors: readonly ClimateSector[];
-}
-
 /** The part of a basis that the engine applies. */
 export interface VibrationBasis {
   readonly windBand: { readonly lowerMPerS: number; readonly upperMPerS: number };
   readonly frequencyCount: number;
   readonly methods: PartialMethodChoice;
+  /** Tables and fits for the methods that ask for one. */
+  readonly curves?: UserCurves | undefined;
   /** Endurance limit for this kind of conductor, zero to peak. */
   readonly endurance: { readonly stressPa: number; readonly source: string };
   /** Strain limit for ends with dampers; null leaves the endurance limit alone. */
@@ -102,6 +82,8 @@ export interface SpanWireAssessment {
     readonly closureRatio: number;
   } | null;
   readonly life: FatigueLife;
+  /** How finely the band was searched, and the share by which the worst stress may still be higher between points. */
+  readonly search: { readonly frequencyCount: number; readonly worstErrorRatio: number };
   readonly methods: readonly MethodNote[];
   readonly warnings: readonly EngineWarning[];
 }

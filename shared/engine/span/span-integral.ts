@@ -1,5 +1,5 @@
 import { gaussLegendre } from '../numerics/gauss-legendre.ts';
-import { windPiece, windPieceValue, type WindPowerPiece } from '../wind/wind-power-curve.ts';
+import { windPiece, windPieceIndex, windPieceValue, type WindPowerPiece } from '../wind/wind-power-curve.ts';
 import type { SpanState } from './span-state.ts';
 
 /** Nodes per panel: six keep the integrals to 1e-9 on the panels of `nextEdge`, see the tests. */
@@ -126,7 +126,7 @@ export function spanSums(state: SpanState, excessRatio: number, range: { limitZ:
   for (let from = 0; from < limitZ;) {
     const to = nextEdge(state, from, { limitZ, baseRatio });
     const width = to - from;
-    const pieceIndex = panelPiece(state, baseRatio * (1 + ((from + to) / 2) ** 2));
+    const pieceIndex = windPieceIndex(state.power.curve, baseRatio * (1 + ((from + to) / 2) ** 2));
     const piece = windPiece(state.power.curve, pieceIndex);
     node.isTop = pieceIndex === top.pieceIndex;
     for (let index = 0; index < panelNodeCount; index += 1) {
@@ -157,9 +157,26 @@ export function poleIntegral(z: number, at: { maxSquare: number; gap: number }):
   return (0.5 / zp) * Math.log(((zp + z) * (zp + z)) / difference);
 }
 
-function panelPiece(state: SpanState, x: number): number {
-  const { curve } = state.power;
-  let index = 0;
-  while (index < curve.length - 1 && x > windPiece(curve, index).upperRatio) index += 1;
-  return index;
+/**
+ * Wire per step of z at one place, dx/dz.
+ *
+ * @param state       span at one frequency
+ * @param excessRatio B_top/B − 1, scalar [ratio], > 0
+ * @param z           place on one side, scalar, ≥ 0
+ * @returns dx/dz, scalar [m]
+ * @source closed form: the integrand of `spanSums`
+ * @validity see spanSums
+ * @accuracy rounding
+ */
+export function spanDensity(state: SpanState, excessRatio: number, z: number): number {
+  const { top, maxSquare, power } = state;
+  const cm = 1 + maxSquare;
+  const square = z * z;
+  const c = 1 + square;
+  const baseRatio = top.xRatio / (cm * (1 + excessRatio));
+  const pieceIndex = windPieceIndex(power.curve, baseRatio * c);
+  const out = { netWPerM: 0, windWPerM: 0, dampingWPerM: 0 };
+  const y = Math.log1p(excessRatio) - Math.log1p((square - maxSquare) / cm);
+  setNodePower(state, windPiece(power.curve, pieceIndex), { y, isTop: pieceIndex === top.pieceIndex, out });
+  return (2 * state.fluxScaleW * baseRatio * baseRatio * (2 * c * c - 1)) / (Math.sqrt(2 + square) * out.netWPerM);
 }

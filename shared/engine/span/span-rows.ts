@@ -3,7 +3,7 @@ import type { BalanceSolver } from './span-balance.ts';
 import { amplitudeRatioAt, spanEnergy, spanPlace, type SpanEnergy } from './span-place.ts';
 import type { EndPair, SpanOutcome, SpanRow } from './span-row.ts';
 import type { SpanSetup } from './span-setup.ts';
-import { outcomeOf, respondEnds, sweepSpan, type EndResponses } from './sweep-span.ts';
+import { outcomeOf, respondEnds, sweepSpan, type EndResponses, type SpanSweep } from './sweep-span.ts';
 
 type RowPowers = Pick<
   SpanRow,
@@ -65,12 +65,12 @@ function strains(
  *
  * @param setup         checked span with its methods
  * @param frequenciesHz f, [n] [Hz], each > 0, in any order
- * @returns rows [n] in the order of the frequencies, and the responses of the ends
+ * @returns rows [n] in the order of the frequencies, and the sweep they come from
  * @source closed form on the chosen methods
  * @validity see solveSpanBalance and clampResponse
  * @accuracy see solveSpanBalance and clampResponse
  */
-export function spanRows(setup: SpanSetup, frequenciesHz: Float64Array): { rows: SpanRow[]; responses: EndResponses } {
+export function spanRows(setup: SpanSetup, frequenciesHz: Float64Array): { rows: SpanRow[]; sweep: SpanSweep } {
   const from = respondEnds(setup, frequenciesHz);
   const powers: RowPowers[] = [];
   const sweep = sweepSpan(setup, from, (index, solver, outcome) => {
@@ -95,5 +95,5 @@ export function spanRows(setup: SpanSetup, frequenciesHz: Float64Array): { rows:
       ...power,
     };
   });
-  return { rows, responses };
+  return { rows, sweep };
 }

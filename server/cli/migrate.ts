@@ -10,7 +10,7 @@ const owner = openAsOwner(loadOwnerDatabaseUrl());
 try {
   const ran = command === 'latest' ? await migrateToLatest(owner) : await migrateToEmpty(owner);
   for (const name of ran) process.stdout.write(`${command === 'latest' ? 'applied' : 'taken back'} ${name}\n`);
-  if (ran.length === 0) process.stdout.write('nothing to migrate\n');
+  if (ran.length === 0 && !process.argv.includes('--quiet')) process.stdout.write('nothing to migrate\n');
 } finally {
   await owner.destroy();
 }

@@ -18,13 +18,22 @@ describe('spanEndLayout', () => {
     expect(to.marks[0]?.x).toBeCloseTo(from.width - (from.marks[0]?.x ?? 0), 9);
   });
 
-  it('gives each damper of one kind its own dimension row, nearest first', () => {
-    const layout = spanEndLayout('from', [{ ...planned, id: 'far', distanceM: 3 }, planned, built]);
-    expect(layout.marks.map(({ id, rowIndex }) => [id, rowIndex])).toEqual([
-      ['p', 0],
-      ['far', 1],
-      ['b', 0],
-    ]);
+  it('gives each damper its own dimension, planned above the wire, as built below, nearest closest to it', () => {
+    const { marks, wireY } = spanEndLayout('from', [{ ...planned, id: 'far', distanceM: 3 }, planned, built]);
+    const offset = new Map(marks.map((mark) => [mark.id, mark.dimensionY - wireY]));
+    expect(offset.get('p')).toBeLessThan(0);
+    expect(offset.get('far')).toBeLessThan(offset.get('p') ?? 0);
+    expect(offset.get('b')).toBeGreaterThan(0);
+  });
+
+  it('grows with the number of dimensions, so that none leaves the drawing', () => {
+    const many = Array.from({ length: 8 }, (_, index) => ({
+      id: String(index),
+      distanceM: index + 1,
+      isAsBuilt: false,
+    }));
+    const { marks } = spanEndLayout('from', many);
+    expect(Math.min(...marks.map((mark) => mark.dimensionY))).toBeGreaterThan(30);
   });
 
   it('shows two metres and a scale when nothing is fitted', () => {

@@ -7,12 +7,15 @@ export interface EndDamper {
 
 export interface EndDamperMark extends EndDamper {
   readonly x: number;
-  /** Row of its dimension line, counted away from the wire; planned ones above, as-built ones below. */
-  readonly rowIndex: number;
+  /** Where its dimension line stands: above the wire when planned, below when as built, a row for each. */
+  readonly dimensionY: number;
 }
 
 export interface SpanEndLayout {
   readonly width: number;
+  readonly height: number;
+  readonly wireY: number;
+  readonly scaleY: number;
   readonly clampX: number;
   /** Direction of growing distance: 1 to the right, −1 to the left. */
   readonly direction: 1 | -1;
@@ -22,6 +25,12 @@ export interface SpanEndLayout {
 }
 
 const diagramWidth = 360;
+const headRoom = 40;
+const firstRowOffset = 26;
+const rowHeight = 20;
+/** Room between the lowest dimension and the scale, and for the figure below the scale. */
+const scaleRoom = 44;
+const scaleFoot = 22;
 const clampMargin = 48;
 const farMargin = 24;
 /** The diagram shows at least this much wire, so that a lone damper close to the clamp is not drawn far away. */
@@ -32,12 +41,6 @@ const ticksMost = 6;
 
 function tickStepM(shownM: number): number {
   return tickStepsM.find((stepM) => shownM / stepM <= ticksMost) ?? 20;
-}
-
-function rowed(dampers: readonly EndDamper[], place: (distanceM: number) => number): EndDamperMark[] {
-  return [...dampers]
-    .sort((one, other) => one.distanceM - other.distanceM)
-    .map((damper, rowIndex) => ({ ...damper, rowIndex, x: place(damper.distanceM) }));
 }
 
 /**
@@ -52,19 +55,27 @@ export function spanEndLayout(side: 'from' | 'to', dampers: readonly EndDamper[]
   const pxPerM = (diagramWidth - clampMargin - farMargin) / shownM;
   const place = (distanceM: number) => clampX + direction * distanceM * pxPerM;
   const stepM = tickStepM(shownM);
+
+  const byDistance = [...dampers].sort((one, other) => one.distanceM - other.distanceM);
+  const planned = byDistance.filter((damper) => !damper.isAsBuilt);
+  const built = byDistance.filter((damper) => damper.isAsBuilt);
+  const wireY = headRoom + firstRowOffset + Math.max(1, planned.length) * rowHeight;
+  const scaleY = wireY + firstRowOffset + built.length * rowHeight + scaleRoom;
+  const mark = (damper: EndDamper, offset: number): EndDamperMark => ({
+    ...damper,
+    x: place(damper.distanceM),
+    dimensionY: wireY + offset,
+  });
   return {
     width: diagramWidth,
+    height: scaleY + scaleFoot,
+    wireY,
+    scaleY,
     clampX,
     direction,
     marks: [
-      ...rowed(
-        dampers.filter((damper) => !damper.isAsBuilt),
-        place,
-      ),
-      ...rowed(
-        dampers.filter((damper) => damper.isAsBuilt),
-        place,
-      ),
+      ...planned.map((damper, row) => mark(damper, -(firstRowOffset + row * rowHeight))),
+      ...built.map((damper, row) => mark(damper, firstRowOffset + row * rowHeight)),
     ],
     ticks: Array.from({ length: Math.floor(shownM / stepM) + 1 }, (_, index) => ({
       distanceM: index * stepM,

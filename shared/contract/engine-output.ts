@@ -1,0 +1,80 @@
+import { z } from 'zod';
+import { engineSchemaName } from './engine.ts';
+
+const pair = <T extends z.ZodType>(value: T) => z.tuple([value, value]).describe('[left, right]');
+const orNull = z.number().nullable();
+const complex = z.object({ re: z.number(), im: z.number() });
+
+const note = z.object({
+  name: z.string(),
+  standing: z.enum(['published', 'closed form', 'common practice', 'from memory', 'own model']),
+  source: z.string(),
+});
+const head = {
+  schema: z.literal(engineSchemaName),
+  engineVersion: z.string(),
+  methods: z.array(note).describe('Methods used, with how well each is founded'),
+  warnings: z.array(z.object({ code: z.string(), text: z.string() })),
+};
+
+/** Output of the engine's `waves` command. */
+export const wavesOutputSchema = z.object({
+  ...head,
+  rows: z.array(
+    z.object({
+      frequencyHz: z.number(),
+      phaseSpeedMPerS: z.number(),
+      groupSpeedMPerS: z.number(),
+      impedanceNsPerM: z.number(),
+      wavelengthM: z.number(),
+      loopLengthM: z.number(),
+    }),
+  ),
+});
+
+/** Output of the engine's `end` command. */
+export const endOutputSchema = z.object({
+  ...head,
+  rows: z.array(
+    z.object({
+      frequencyHz: z.number(),
+      outcome: z.enum(['steady', 'no-damper-data']),
+      reflection: complex.nullable(),
+      absorbedRatio: orNull,
+      iswRatio: orNull,
+      clampCurvaturePerM2: orNull.describe('Curvature per antinode amplitude, 1/m²'),
+      damperCurvaturePerM2: z.array(orNull).describe('The same at each damper clamp, in the order of the input'),
+      damperMotionRatio: z.array(orNull).describe('Motion of each damper clamp over the antinode amplitude'),
+    }),
+  ),
+});
+
+/** Output of the engine's `damper` command. */
+export const damperOutputSchema = z.object({
+  ...head,
+  naturalFrequenciesHz: z.array(z.array(z.number())).nullable().describe('Per half; null for a table'),
+  rows: z.array(
+    z.object({ frequencyHz: z.number(), impedance: complex.nullable().describe('N·s/m; null outside a table') }),
+  ),
+});
+
+/** Output of the engine's `span` command. */
+export const spanOutputSchema = z.object({
+  ...head,
+  rows: z.array(
+    z.object({
+      frequencyHz: z.number(),
+      windSpeedMPerS: z.number(),
+      outcome: z.enum(['steady', 'quiet', 'amplitude-limit', 'no-damper-data']),
+      midAmplitudeM: orNull,
+      endAmplitudeM: pair(orNull),
+      endReflectionRatio: pair(orNull),
+      clampStrainRatio: pair(orNull),
+      damperClampStrainRatio: pair(z.array(orNull)),
+      windPowerW: orNull,
+      selfDampingPowerW: orNull,
+      endPowerW: pair(orNull),
+      energyClosureRatio: orNull,
+    }),
+  ),
+});

@@ -1,0 +1,138 @@
+import { z } from 'zod';
+import { damperModelSchema } from './dampers.ts';
+
+/** Name and version of the engine's documents. */
+export const engineSchemaName = 'stillspan.engine/1';
+
+const finite = () =>
+  z.number({ error: (issue) => (issue.input === undefined ? 'is required' : 'must be a finite number') });
+const schemaName = z.literal(engineSchemaName).optional().describe('Name of this kind of document; may be left out');
+
+const wireFields = {
+  diameterM: finite().min(0.001).max(0.2).describe('Diameter over the outer strands, m'),
+  massKgPerM: finite().min(0.005).max(50).describe('Mass per length, kg/m'),
+  ratedStrengthN: finite().min(100).max(5e6).describe('Rated strength, N'),
+  bendingStiffnessMinNm2: finite().min(1e-4).max(1e6).describe('Bending stiffness with strands sliding freely, N·m²'),
+  outerStrandDiameterM: finite().min(1e-4).max(0.2).describe('Diameter of an outer strand, m'),
+  outerStrandModulusPa: finite().min(1e9).max(1e12).describe('Modulus of elasticity of an outer strand, Pa'),
+};
+export const engineWireSchema = z.strictObject(wireFields);
+
+/** A wire of which only mass and stiffness are needed. */
+const waveWireSchema = z.strictObject({
+  ...wireFields,
+  diameterM: wireFields.diameterM.optional(),
+  ratedStrengthN: wireFields.ratedStrengthN.optional(),
+  outerStrandDiameterM: wireFields.outerStrandDiameterM.optional(),
+  outerStrandModulusPa: wireFields.outerStrandModulusPa.optional(),
+});
+
+const tension = finite().min(1).max(5e6).describe('Horizontal tension, N');
+export const engineFrequenciesSchema = z
+  .array(finite().positive('must be above 0').max(1000))
+  .min(1)
+  .max(20_000)
+  .describe('Frequencies in any order, Hz');
+
+export const engineEndSchema = z.strictObject({
+  clampReflectionRatio: finite().min(0).max(1).optional().describe('Factor on the reflection for loss in the clamp'),
+  dampers: z
+    .array(
+      z.strictObject({
+        distanceM: finite().positive('must be above 0').describe('From the last point of contact at the clamp, m'),
+        model: damperModelSchema,
+      }),
+    )
+    .max(12),
+});
+
+const spanFields = {
+  lengthM: finite().min(1).max(10_000).describe('Span length, m'),
+  tensionN: tension,
+  bearingRad: finite()
+    .min(-2 * Math.PI)
+    .max(4 * Math.PI)
+    .optional()
+    .describe('Bearing from true north, rad'),
+};
+
+const methodName = (kind: string) => z.string().max(100).optional().describe(`Registry name of the ${kind} method`);
+export const engineMethodsSchema = z.strictObject({
+  strouhal: methodName('Strouhal number'),
+  windPower: methodName('wind power'),
+  turbulence: methodName('turbulence'),
+  selfDamping: methodName('self-damping'),
+  life: methodName('fatigue life'),
+});
+
+const source = z.string().min(1).max(400);
+export const engineCurvesSchema = z.strictObject({
+  windPower: z
+    .strictObject({
+      rows: z
+        .array(z.strictObject({ amplitudeRatio: finite(), windPowerNumber: finite() }))
+        .min(2)
+        .max(500),
+      source,
+    })
+    .optional(),
+  turbulence: z
+    .strictObject({
+      rows: z
+        .array(z.strictObject({ turbulenceIntensityRatio: finite(), factorRatio: finite() }))
+        .min(1)
+        .max(500),
+      source,
+    })
+    .optional(),
+  selfDamping: z
+    .strictObject({
+      coefficientNumber: finite(),
+      amplitudeExponentNumber: finite(),
+      frequencyExponentNumber: finite(),
+      tensionExponentNumber: finite(),
+      source,
+    })
+    .optional(),
+});
+
+export const engineAirSchema = z.strictObject({
+  densityKgPerM3: finite().min(0.3).max(2).describe('Air density, kg/m³'),
+  turbulenceIntensityRatio: finite().min(0).max(1).describe('Turbulence intensity'),
+});
+
+/** Input of the engine's `waves` command. */
+export const wavesInputSchema = z.strictObject({
+  schema: schemaName,
+  wire: waveWireSchema.extend({ bendingStiffnessMinNm2: finite().min(0).max(1e6) }),
+  span: z.strictObject({ ...spanFields, lengthM: spanFields.lengthM.optional() }),
+  frequenciesHz: engineFrequenciesSchema,
+});
+
+/** Input of the engine's `end` command. */
+export const endInputSchema = z.strictObject({
+  schema: schemaName,
+  wire: waveWireSchema,
+  tensionN: tension,
+  end: engineEndSchema,
+  frequenciesHz: engineFrequenciesSchema,
+});
+
+/** Input of the engine's `damper` command. */
+export const damperInputSchema = z.strictObject({
+  schema: schemaName,
+  model: damperModelSchema,
+  frequenciesHz: engineFrequenciesSchema,
+});
+
+/** Input of the engine's `span` command. */
+export const spanInputSchema = z.strictObject({
+  schema: schemaName,
+  wire: engineWireSchema,
+  span: z.strictObject(spanFields),
+  air: engineAirSchema,
+  ends: z.tuple([engineEndSchema, engineEndSchema]),
+  frequenciesHz: engineFrequenciesSchema,
+  methods: engineMethodsSchema.optional(),
+  curves: engineCurvesSchema.optional(),
+});

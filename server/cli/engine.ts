@@ -193,13 +193,13 @@ function refuseUsage(message: string): void {
 }
 
 const [name = '', ...flags] = process.argv.slice(2);
-const command = Object.hasOwn(engineCommands, name) ? engineCommands[name] : undefined;
+const chosen = Object.hasOwn(engineCommands, name) ? engineCommands[name] : undefined;
 const unknownFlag = flags.find((flag) => flag !== '--lines');
 if (unknownFlag !== undefined) refuseUsage(`does not know the option ${unknownFlag}; there is --lines`);
 else if (name === 'describe') await print(`${JSON.stringify(describeEngineCommands(), null, 2)}\n`);
-else if (command === undefined) {
+else if (chosen === undefined) {
   refuseUsage(`needs a command: ${[...Object.keys(engineCommands), 'describe'].join(', ')}`);
 } else {
-  const isClean = flags.includes('--lines') ? await answerLines(command) : await answerWhole(command);
+  const isClean = flags.includes('--lines') ? await answerLines(chosen) : await answerWhole(chosen);
   if (!isClean) process.exitCode = refusedExit;
 }

@@ -1,4 +1,5 @@
 import type { UtilityTransaction } from './database.ts';
+import { jsonRows } from './line-import-json-rows.ts';
 import { countLines, type LineRecord } from './line-import-records.ts';
 
 /** Rows a statement takes: large enough to be quick, small enough to keep memory and progress even. */
@@ -7,7 +8,7 @@ const usualBatchRowCount = 4000;
 const wireBatchRowCount = 500;
 
 interface SaveOptions {
-  readonly importId: string;
+  readonly importId: string | null;
   /** Roughness where no terrain zone covers the middle of a span; null takes the utility's own. */
   readonly defaultRoughnessM: number | null;
   readonly onProgress: (doneCount: number, totalCount: number) => Promise<void>;
@@ -105,14 +106,6 @@ function stepsOf(lines: readonly LineRecord[]): Step[] {
     { sql: wireSql, rows: wires },
     { sql: spanWireSql, rows: wires.map(({ id }) => ({ id })), batchRowCount: wireBatchRowCount },
   ];
-}
-
-const snakeKey = (key: string) => key.replace(/[A-Z]/g, (letter) => `_${letter.toLowerCase()}`);
-
-function jsonRows(rows: readonly object[]): string {
-  return JSON.stringify(
-    rows.map((row) => Object.fromEntries(Object.entries(row).map(([key, value]) => [snakeKey(key), value]))),
-  );
 }
 
 /**

@@ -1,11 +1,8 @@
 import { z } from 'zod';
+import { toCamelCase } from '#shared/units/suffixes.ts';
 
 /** A timestamptz column as it leaves the database layer: ISO 8601, UTC. */
 export const instantColumn = z.date().transform((date) => date.toISOString());
-
-function toCamelCase(column: string): string {
-  return column.replace(/_([a-z0-9])/g, (_, next: string) => next.toUpperCase());
-}
 
 type RawRow = Readonly<Record<string, unknown>>;
 

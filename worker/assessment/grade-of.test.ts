@@ -58,6 +58,7 @@ function aResult(utilisationRatio: number | null, more: Partial<SpanWireAssessme
     life: { outcome: 'no-climate' },
     methods: [],
     warnings: [],
+    search: { frequencyCount: 150, worstErrorRatio: 0 },
     ...more,
   };
 }

@@ -1,0 +1,72 @@
+/** The closed list of unit suffixes that names of quantities end in, in camel case. Adding one is reviewed. */
+export const unitSuffixes = [
+  'M',
+  'M2',
+  'M4',
+  'PerM',
+  'PerM2',
+  'RadPerM',
+  'Kg',
+  'KgPerM',
+  'KgPerM3',
+  'KgM2',
+  'KgM',
+  'S',
+  'Hz',
+  'MPerS',
+  'MPerS2',
+  'Rad',
+  'RadPerS',
+  'K',
+  'Ratio',
+  'Coef',
+  'Number',
+  'Deg',
+  'V',
+  'N',
+  'NPerM',
+  'Nm',
+  'Nm2',
+  'Pa',
+  'PaS',
+  'M2PerS',
+  'W',
+  'WPerM',
+  'J',
+  'JPerM',
+  'NsPerM',
+  'NsPerM2',
+  'C',
+  'PerK',
+  'Count',
+  'Index',
+  'Amount',
+  'Ms',
+  'Bytes',
+  'Mm',
+  'Mm2',
+  'Km',
+  'KN',
+  'KNPerM',
+  'KV',
+  'MPa',
+  'GPa',
+  'KmPerH',
+  'MicroStrain',
+  'Percent',
+  'Year',
+  'Years',
+  'Hour',
+  'Hours',
+  'Minutes',
+] as const;
+
+/** Name of a column as code: `bending_stiffness_min_nm2` to `bendingStiffnessMinNm2`. */
+export function toCamelCase(column: string): string {
+  return column.replace(/_([a-z0-9])/g, (_match, next: string) => next.toUpperCase());
+}
+
+/** Name in code as a column: `windSpeedMPerS` to `wind_speed_m_per_s`. Runs of capitals count letter by letter. */
+export function toSnakeCase(name: string): string {
+  return name.replace(/[A-Z]/g, (letter) => `_${letter.toLowerCase()}`);
+}

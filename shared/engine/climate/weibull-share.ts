@@ -1,3 +1,5 @@
+import { gammaFunction } from '../numerics/gamma-function.ts';
+
 /** Weibull distribution of wind speed. */
 export interface WeibullWind {
   readonly scaleMPerS: number;
@@ -18,4 +20,17 @@ export interface WeibullWind {
 export function weibullShare(wind: WeibullWind, lowerMPerS: number, upperMPerS: number): number {
   const above = (speed: number) => Math.exp(-((speed / wind.scaleMPerS) ** wind.shapeNumber));
   return above(lowerMPerS) - above(upperMPerS);
+}
+
+/**
+ * Mean of a Weibull distribution, A·Γ(1 + 1/k).
+ *
+ * @param wind A, scalar [m/s], > 0; k, scalar, > 0
+ * @returns mean wind speed, scalar [m/s]
+ * @source closed form
+ * @validity that of the fit of the distribution
+ * @accuracy 1e-14 relative
+ */
+export function weibullMean(wind: WeibullWind): number {
+  return wind.scaleMPerS * gammaFunction(1 + 1 / wind.shapeNumber);
 }

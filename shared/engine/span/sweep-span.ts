@@ -1,6 +1,7 @@
 import { respondEnd, type ImpedanceStore } from '../ends/respond-end.ts';
 import type { EndResponse } from '../ends/end-response.ts';
 import { waveTable, type WaveTable } from '../waves/wave-table.ts';
+import { referenceDensityKgPerM3 } from '../wind/wind-power.ts';
 import { balanceSolver, solveSpanBalance, type BalanceInput, type BalanceSolver } from './span-balance.ts';
 import type { EndPair, SpanOutcome } from './span-row.ts';
 import type { SpanSetup } from './span-setup.ts';
@@ -31,9 +32,6 @@ export interface SpanSweep {
 
 /** Called after each solved frequency, with the solver still in that state. */
 export type SweepVisitor = (index: number, solver: BalanceSolver, outcome: SpanOutcome) => void;
-
-/** Air density at which wind power curves are stated. @source common practice: 15 °C at sea level */
-const referenceDensityKgPerM3 = 1.225;
 
 /**
  * Responses of both ends of a span at given frequencies.

@@ -62,6 +62,11 @@ function mountClient(app: Express, directory: string): void {
   });
 }
 
+/** What the log keeps of a request: no headers and no query, which may hold credentials. */
+function loggedRequest(request: { id: unknown; method: string; url: string }) {
+  return { id: request.id, method: request.method, path: request.url.split('?')[0] };
+}
+
 /** Builds the HTTP service; it never listens by itself. */
 export function createApp(deps: AppDeps): Express {
   const { config, database, logger } = deps;
@@ -73,6 +78,7 @@ export function createApp(deps: AppDeps): Express {
     pinoHttp({
       logger,
       genReqId: () => randomUUID(),
+      serializers: { req: loggedRequest },
       autoLogging: { ignore: (request) => request.url?.startsWith('/health') === true },
     }),
   );

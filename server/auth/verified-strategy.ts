@@ -18,7 +18,8 @@ type SignIn = (idToken: string) => Promise<Express.User>;
  * used before its signature stands against the provider's published keys.
  */
 export class VerifiedStrategy extends Strategy {
-  readonly #provider: Provider;
+  // Not #private: Passport works on Object.create(strategy), which has no such fields.
+  private readonly provider: Provider;
 
   constructor(provider: Provider, settings: Settings, signIn: SignIn) {
     super(
@@ -41,7 +42,7 @@ export class VerifiedStrategy extends Strategy {
         );
       },
     );
-    this.#provider = provider;
+    this.provider = provider;
   }
 
   override authenticate(request: Request, options: object = {}): void {
@@ -55,7 +56,7 @@ export class VerifiedStrategy extends Strategy {
     const verifier = request.session.pkceVerifier;
     delete request.session.pkceVerifier;
     // Passport makes a fresh object for each request, so this replaces the client for this request only.
-    this._oauth2 = this.#verifyingClient(this._oauth2, verifier ?? '');
+    this._oauth2 = this.verifyingClient(this._oauth2, verifier ?? '');
     super.authenticate(request, options);
   }
 
@@ -63,16 +64,18 @@ export class VerifiedStrategy extends Strategy {
     return options.challenge === undefined ? {} : { code_challenge: options.challenge, code_challenge_method: 'S256' };
   }
 
-  #verifyingClient(client: TokenClient, verifier: string): TokenClient {
-    const getOAuthAccessToken = (code: string, parameters: Record<string, string>, done: TokenCallback): void => {
+  private verifyingClient(client: TokenClient, verifier: string): TokenClient {
+    // Inherits from the library's client, whose other settings the library reads too.
+    const verifying: TokenClient = Object.create(client);
+    verifying.getOAuthAccessToken = (code: string, parameters: Record<string, string>, done: TokenCallback): void => {
       client.getOAuthAccessToken(code, { ...parameters, code_verifier: verifier }, (error, access, refresh, answer) => {
         if (error) return done(error);
-        this.#provider.verifyIdToken(answer?.id_token ?? '').then(
+        this.provider.verifyIdToken(answer?.id_token ?? '').then(
           () => done(null, access, refresh, answer),
           (refused: unknown) => done(refused),
         );
       });
     };
-    return { getOAuthAccessToken };
+    return verifying;
   }
 }

@@ -1,6 +1,6 @@
 import { z } from 'zod';
 import { gradeSchema } from '#shared/contract/grades.ts';
-import type { placementRoutes} from '#shared/contract/placements.ts';
+import type { placementRoutes } from '#shared/contract/placements.ts';
 import { fieldLogSchema, structureWorkSchema, type FieldLog } from '#shared/contract/placements.ts';
 import type { QueryOf } from '#shared/contract/route.ts';
 import { keysetPage } from './cursor.ts';

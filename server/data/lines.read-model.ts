@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import type { lineRoutes} from '#shared/contract/lines.ts';
+import type { lineRoutes } from '#shared/contract/lines.ts';
 import { lineSchema, spanListItemSchema } from '#shared/contract/lines.ts';
 import type { QueryOf } from '#shared/contract/route.ts';
 import { keysetPage } from './cursor.ts';

@@ -1,7 +1,20 @@
-import { fileURLToPath } from 'node:url';
+import { readdir } from 'node:fs/promises';
 import knexFactory, { type Knex } from 'knex';
+import { z } from 'zod';
 
-const directory = fileURLToPath(new URL('../../migrations', import.meta.url));
+const directory = new URL('../../migrations/', import.meta.url);
+type Step = (knex: Knex) => Promise<void>;
+const migrationSchema = z.object({
+  up: z.custom<Step>((value) => typeof value === 'function'),
+  down: z.custom<Step>((value) => typeof value === 'function'),
+});
+
+/** Reads the migrations ourselves: Knex's own loader knows neither TypeScript nor the module loader of the tests. */
+const migrationSource: Knex.MigrationSource<string> = {
+  getMigrations: async () => (await readdir(directory)).filter((name) => /^\d{14}_\w+\.ts$/.test(name)).sort(),
+  getMigrationName: (name) => name,
+  getMigration: async (name) => migrationSchema.parse({ ...(await import(new URL(name, directory).href)) }),
+};
 
 /** Opens the database as its owner, for migrations. */
 export function openAsOwner(ownerUrl: string): Knex {
@@ -9,7 +22,7 @@ export function openAsOwner(ownerUrl: string): Knex {
     client: 'pg',
     connection: ownerUrl,
     pool: { min: 0, max: 2 },
-    migrations: { directory, loadExtensions: ['.ts'], tableName: 'schema_migrations' },
+    migrations: { migrationSource, tableName: 'schema_migrations' },
   });
 }
 

@@ -1,8 +1,13 @@
 import { describe, expect, it } from 'vitest';
+import { z } from 'zod';
 import { aChart } from './a-chart.ts';
 import { chartData, chartOptions } from './chart-config.ts';
 import type { ChartPalette } from './chart-palette.ts';
 import { withAlpha } from './chart-palette.ts';
+
+const tickHolder = z.object({
+  ticks: z.object({ callback: z.custom<(value: number) => string>((candidate) => typeof candidate === 'function') }),
+});
 
 const palette: ChartPalette = {
   paper: '#ffffff',
@@ -19,6 +24,12 @@ const palette: ChartPalette = {
     flux: '#070707',
   },
 };
+
+/** Calls the tick callback of a scale the way Chart.js does. */
+function tickText(scale: unknown, value: number): unknown {
+  const { ticks } = tickHolder.parse(scale);
+  return ticks.callback(value);
+}
 
 describe('chartData', () => {
   it('breaks a line where there is no number', () => {
@@ -49,6 +60,12 @@ describe('chartOptions', () => {
     const { scales } = chartOptions(aChart({ secondXAxis: second }), palette);
     expect(scales?.['x']).toMatchObject({ min: 1, max: 3 });
     expect(scales?.['secondX']).toMatchObject({ min: 6.5, max: 19.5 });
+  });
+
+  it('writes ticks without zeros at their end, and leaves the zeros of whole numbers', () => {
+    const format = (value: number) => `${value}.00`;
+    const { scales } = chartOptions(aChart({ xAxis: { label: 'x', unit: '', format } }), palette);
+    expect(tickText(scales?.['x'], 200)).toBe('200');
   });
 
   it('makes room for a limit above the curves', () => {

@@ -41,6 +41,11 @@ export function chartData(model: ChartModel, palette: ChartPalette): ChartData<'
   return { datasets: model.series.map((series, index) => datasetOf(series, index, { model, palette })) };
 }
 
+/** Ticks are round numbers; digits that say how well a measured number is known only crowd them. */
+function withoutEndZeros(text: string): string {
+  return text.includes('.') ? text.replace(/\.?0+$/, '') : text;
+}
+
 function scaleOf(axis: ChartAxis, palette: ChartPalette) {
   return {
     type: 'linear' as const,
@@ -57,7 +62,7 @@ function scaleOf(axis: ChartAxis, palette: ChartPalette) {
       maxRotation: 0,
       // The ends of a wind band are odd numbers that crowd the round ones.
       includeBounds: false,
-      callback: (value: string | number) => axis.format(Number(value)),
+      callback: (value: string | number) => withoutEndZeros(axis.format(Number(value))),
     },
     grid: { color: withAlpha(palette.quiet, 0.25), tickColor: palette.quiet },
     border: { color: palette.quiet },

@@ -29,7 +29,7 @@ describe('impedancePoints', () => {
     const at10 = points.reduce((best, point) =>
       Math.abs(point.frequencyHz - 10) < Math.abs(best.frequencyHz - 10) ? point : best,
     );
-    // |303.9529 − 25.7233j| N·s/m at 10 Hz; the drawn point is the one of the 0.5 Hz grid there.
+    // |303.9529 − 25.7233j| N·s/m at 10 Hz; the drawn point is the one of the 0.25 Hz grid there.
     expect(at10.frequencyHz).toBeCloseTo(10, 9);
     expect(at10.magnitudeNsPerM).toBeCloseTo(Math.hypot(303.9529, 25.7233), 2);
   });

@@ -8,7 +8,7 @@ export interface ImpedancePoint {
 
 /** Band in which a damper known by its parts is drawn; aeolian vibration lies inside it. */
 const drawnBandHz = { lower: 3, upper: 100 } as const;
-const drawnCount = 195;
+const drawnCount = 389;
 
 type ImpedanceRow = Extract<DamperType['model'], { kind: 'table' }>['rows'][number];
 

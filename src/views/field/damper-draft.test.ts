@@ -79,6 +79,7 @@ describe('offPlanM', () => {
     const spanWire = aSpanWire();
     const draft = newDraft(spanWire, null, countingIds());
     expect(offPlanM({ ...draft, distanceM: 1.39 }, spanWire)).toBeCloseTo(0.34, 9);
+    expect(offPlanM(draft, spanWire)).toBeNull();
     expect(offPlanM({ ...draft, replacesPlacementId: null }, spanWire)).toBeNull();
   });
 });

@@ -88,12 +88,13 @@ export function fieldLogInput(
   });
 }
 
-/** How far the fitted distance is from the planned one, m; null when nothing was planned. */
+/** How far the fitted distance is from the planned one, m; null when nothing was planned or both are the same place. */
 export function offPlanM(draft: DamperDraft, spanWire: SpanWireAtStructure): number | null {
   const planned = spanWire.placements.find((placement) => placement.id === draft.replacesPlacementId);
   if (planned === undefined || draft.distanceM === null) return null;
   const plannedM = planned.state === 'planned' ? planned.distanceM : planned.plannedDistanceM;
-  return plannedM === null ? null : draft.distanceM - plannedM;
+  const offsetM = plannedM === null ? 0 : draft.distanceM - plannedM;
+  return Math.abs(offsetM) < samePlaceM / 2 ? null : offsetM;
 }
 
 /** Next distance of the stepper, m: whole centimetres, never below one step. */

@@ -1,6 +1,6 @@
 import type { FindingSeries } from '#shared/contract/findings.ts';
 import { anId } from '#src/components/drawing/a-section.ts';
-import type { ChartScale } from './chart-scale.ts';
+import type { ChartScale } from '#src/components/chart/chart-scale.ts';
 import type { VibrationSource } from './vibration-source.ts';
 
 /** Test builder: one row of a series; 20 Hz at 3 m/s, steady, with damper data at both ends. */

@@ -1,6 +1,6 @@
 import type { ChartAxis, ChartModel, ChartSeries } from '#src/components/chart/chart-model.ts';
-import type { ChartScale } from './chart-scale.ts';
-import { quantityText } from './chart-scale.ts';
+import type { ChartScale } from '#src/components/chart/chart-scale.ts';
+import { quantityText } from '#src/components/chart/chart-scale.ts';
 import type { VibrationSource } from './vibration-source.ts';
 import { fileStem } from './vibration-source.ts';
 

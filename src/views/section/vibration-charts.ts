@@ -1,7 +1,7 @@
 import type { FindingSeries } from '#shared/contract/findings.ts';
 import type { ChartAxis, ChartGap, ChartLimit, ChartModel, ChartSeries } from '#src/components/chart/chart-model.ts';
-import type { ChartScale } from './chart-scale.ts';
-import { quantityText } from './chart-scale.ts';
+import type { ChartScale } from '#src/components/chart/chart-scale.ts';
+import { quantityText } from '#src/components/chart/chart-scale.ts';
 import { rangesWhere } from './series-gaps.ts';
 import type { VibrationSource } from './vibration-source.ts';
 import { fileStem } from './vibration-source.ts';

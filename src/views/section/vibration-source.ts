@@ -1,5 +1,16 @@
 import type { FindingSeries } from '#shared/contract/findings.ts';
-import type { ChartScales } from './chart-scale.ts';
+import type { ChartScale } from '#src/components/chart/chart-scale.ts';
+
+/** The scales of all quantities that the charts of a finding use. */
+export interface ChartScales {
+  readonly stress: ChartScale;
+  readonly amplitude: ChartScale;
+  readonly windSpeed: ChartScale;
+  readonly frequency: ChartScale;
+  readonly power: ChartScale;
+  readonly position: ChartScale;
+  readonly ratio: ChartScale;
+}
 
 /** What the charts of one finding are made from. */
 export interface VibrationSource {

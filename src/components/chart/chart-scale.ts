@@ -7,17 +7,6 @@ export interface ChartScale {
   readonly format: (shownValue: number) => string;
 }
 
-/** The scales of all quantities that the charts of a finding use. */
-export interface ChartScales {
-  readonly stress: ChartScale;
-  readonly amplitude: ChartScale;
-  readonly windSpeed: ChartScale;
-  readonly frequency: ChartScale;
-  readonly power: ChartScale;
-  readonly position: ChartScale;
-  readonly ratio: ChartScale;
-}
-
 /** Number with its unit, from SI. */
 export function quantityText(scale: ChartScale, value: number): string {
   const text = scale.format(scale.shown(value));

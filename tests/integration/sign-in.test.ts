@@ -23,7 +23,11 @@ describe('signing in', () => {
     const landed = await person.signIn('tern-engineer', '/risk?grades=urgent');
     expect(landed.pathname + landed.search).toBe('/risk?grades=urgent');
     const { body } = await person.get('/session');
-    expect(body).toMatchObject({ roles: ['engineer'], utility: { code: 'tern' }, person: { email: 'ines.halvorsen@tern.example' } });
+    expect(body).toMatchObject({
+      roles: ['engineer'],
+      utility: { code: 'tern' },
+      person: { email: 'ines.halvorsen@tern.example' },
+    });
   });
 
   it('sends PKCE, state and nonce', async () => {
@@ -33,17 +37,20 @@ describe('signing in', () => {
     for (const key of ['code_challenge', 'state', 'nonce']) expect(query.get(key)?.length ?? 0).toBeGreaterThan(15);
   });
 
-  it.each(['forged-signature', 'wrong-audience', 'wrong-nonce', 'wrong-issuer', 'expired'])('refuses a token with %s', async (fault) => {
-    await setFault(fault);
-    const person = new PersonSession(stack.url);
-    const landed = await person.signIn('tern-engineer');
-    expect(landed.pathname).toBe('/signed-out');
-    expect((await person.get('/session')).status).toBe(401);
-    // The same person gets in when the provider behaves again.
-    const again = new PersonSession(stack.url);
-    await again.signIn('tern-engineer');
-    expect((await again.get('/session')).status).toBe(200);
-  });
+  it.each(['forged-signature', 'wrong-audience', 'wrong-nonce', 'wrong-issuer', 'expired'])(
+    'refuses a token with %s',
+    async (fault) => {
+      await setFault(fault);
+      const person = new PersonSession(stack.url);
+      const landed = await person.signIn('tern-engineer');
+      expect(landed.pathname).toBe('/signed-out');
+      expect((await person.get('/session')).status).toBe(401);
+      // The same person gets in when the provider behaves again.
+      const again = new PersonSession(stack.url);
+      await again.signIn('tern-engineer');
+      expect((await again.get('/session')).status).toBe(200);
+    },
+  );
 
   it('refuses a code that was used before, and an answer with a foreign state', async () => {
     const person = new PersonSession(stack.url);
@@ -86,9 +93,15 @@ describe('signing in', () => {
   it('signs out here and at the provider', async () => {
     const person = new PersonSession(stack.url);
     await person.signIn('tern-manager');
-    const refused = await person.send('/auth/sign-out', { method: 'POST', body: new URLSearchParams({ csrfToken: 'wrong' }) });
+    const refused = await person.send('/auth/sign-out', {
+      method: 'POST',
+      body: new URLSearchParams({ csrfToken: 'wrong' }),
+    });
     expect(refused.status).toBe(403);
-    const out = await person.send('/auth/sign-out', { method: 'POST', body: new URLSearchParams({ csrfToken: person.csrfToken }) });
+    const out = await person.send('/auth/sign-out', {
+      method: 'POST',
+      body: new URLSearchParams({ csrfToken: person.csrfToken }),
+    });
     expect(out.headers.get('location')).toContain(`${stack.issuerUrl}/session/end`);
     expect((await person.get('/session')).status).toBe(401);
   });
@@ -111,7 +124,11 @@ describe('sessions and forgery', () => {
   it('refuses changing calls without the token of the session', async () => {
     const person = new PersonSession(stack.url);
     await person.signIn('tern-engineer');
-    const without = await person.send('/api/v1/assessments', { method: 'POST', body: '{}', headers: { 'content-type': 'application/json' } });
+    const without = await person.send('/api/v1/assessments', {
+      method: 'POST',
+      body: '{}',
+      headers: { 'content-type': 'application/json' },
+    });
     expect(without.status).toBe(403);
     expect(await without.json()).toMatchObject({ code: 'csrf-refused' });
   });

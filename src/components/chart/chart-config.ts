@@ -1,6 +1,7 @@
 import type { ChartData, ChartDataset, ChartOptions, ScaleOptionsByType } from 'chart.js';
 import type { ChartAxis, ChartModel, ChartSeries } from './chart-model.ts';
 import { xExtent } from './chart-model.ts';
+import { withoutEndZeros } from './chart-scale.ts';
 import type { ChartPalette } from './chart-palette.ts';
 import { withAlpha } from './chart-palette.ts';
 
@@ -39,11 +40,6 @@ interface DatasetContext {
 /** Data of a chart as Chart.js takes it. */
 export function chartData(model: ChartModel, palette: ChartPalette): ChartData<'line'> {
   return { datasets: model.series.map((series, index) => datasetOf(series, index, { model, palette })) };
-}
-
-/** Ticks are round numbers; digits that say how well a measured number is known only crowd them. */
-function withoutEndZeros(text: string): string {
-  return text.includes('.') ? text.replace(/\.?0+$/, '') : text;
 }
 
 function scaleOf(axis: ChartAxis, palette: ChartPalette) {

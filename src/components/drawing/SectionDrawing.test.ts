@@ -7,7 +7,7 @@ const choice = { spanId: anId(21), wireId: anId(31) };
 
 function mounted(section = aSection()) {
   return mount(SectionDrawing, {
-    props: { section, choice, lengthText: (lengthM: number) => `${lengthM} m` },
+    props: { section, choice, heightText: (heightM: number) => `${heightM} m` },
     attachTo: document.body,
   });
 }

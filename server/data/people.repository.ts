@@ -47,6 +47,12 @@ export async function savePersonAtSignIn(
   return saved;
 }
 
+/** Names a person before the first sign-in, so that messages reach them; the identity provider has the last word. */
+export async function savePersonAhead(tx: UtilityTransaction, person: StatedPerson): Promise<void> {
+  const { personId } = await savePersonAtSignIn(tx, person);
+  await tx.run('update people set last_signed_in_at = null where id = :personId', { personId });
+}
+
 async function replaceRoles(tx: UtilityTransaction, personId: string, roles: readonly Role[]): Promise<void> {
   const before = await tx.rows(
     z.object({ role: z.string() }),

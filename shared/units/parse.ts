@@ -16,6 +16,20 @@ const spellings: Readonly<Record<string, string>> = {
   "'": 'ft',
 };
 
+const groupedNumber = /^([+-]?\d{1,3}(?:,\d{3})+)(?![\d,])/;
+
+/**
+ * Text without the marks that group digits. "1,150" is 1150 to readers of US units; to others it may as well be 1.15,
+ * so it is left ambiguous (null) instead of guessed.
+ */
+function ungrouped(text: string, system: UnitSystem): string | null {
+  const joined = text.trim().replace(/(?<=\d)[\u2009\u202f\u00a0 ](?=\d{3}(?!\d))/g, '');
+  const grouped = groupedNumber.exec(joined)?.[1];
+  if (grouped === undefined) return joined;
+  if (system !== 'us') return null;
+  return grouped.replaceAll(',', '') + joined.slice(grouped.length);
+}
+
 function refuse(kind: QuantityKind, system: UnitSystem): ParsedQuantity {
   const label = unitLabel(kind, system);
   return {
@@ -29,7 +43,10 @@ function refuse(kind: QuantityKind, system: UnitSystem): ParsedQuantity {
  * ("700 ft", "45 mph", "8.5 MPa"). mathjs, which knows the units, is loaded at the first unit that is not the shown one.
  */
 export async function parseQuantity(text: string, kind: QuantityKind, system: UnitSystem): Promise<ParsedQuantity> {
-  const match = numberThenUnit.exec(text);
+  const plainText = ungrouped(text, system);
+  if (plainText === null)
+    return { ok: false, message: 'the comma may mark thousands or decimals; write 1150 or 1.150' };
+  const match = numberThenUnit.exec(plainText);
   if (match?.[1] === undefined) return refuse(kind, system);
   const number = Number(match[1].replace(',', '.'));
   if (!Number.isFinite(number)) return refuse(kind, system);

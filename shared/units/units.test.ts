@@ -61,13 +61,16 @@ describe('parseQuantity', () => {
     ['20 %', 'share', 'metric', 0.2],
     ['8.5 MPa', 'stress', 'us', 8.5e6],
     ['110 kV', 'voltage', 'metric', 110_000],
+    ['1,150', 'length', 'us', 350.52],
+    ['1,150.5 ft', 'length', 'us', 350.6724],
+    ['27\u2009800 m', 'length', 'metric', 27_800],
   ] as const)('reads %s', async (text, kind, system, value) => {
     const parsed = await parseQuantity(text, kind, system);
     expect(parsed.ok).toBe(true);
     if (parsed.ok) expect(parsed.value / value).toBeCloseTo(1, 4);
   });
 
-  it.each(['', 'about ten', '5 kg', 'NaN', 'Infinity'])('refuses "%s" as a length', async (text) => {
+  it.each(['', 'about ten', '5 kg', 'NaN', 'Infinity', '1,150'])('refuses "%s" as a length', async (text) => {
     expect((await parseQuantity(text, 'length', 'metric')).ok).toBe(false);
   });
 });

@@ -8,6 +8,18 @@ function signedOutAt(to: RouteLocationNormalized) {
   return { path: '/signed-out', query: { returnTo: to.fullPath } };
 }
 
+/** Loads the session; false only when nobody is signed in. A service that cannot answer is not a sign-out. */
+async function loadSession(): Promise<boolean> {
+  const store = useSessionStore();
+  try {
+    store.set(await call('getSession'));
+  } catch (error) {
+    if (error instanceof ApiProblem && error.problem.code === 'not-signed-in') return false;
+    store.fail(error instanceof Error ? error : new Error(String(error)));
+  }
+  return true;
+}
+
 /** Loads the session once; without one, pages lead to the sign-in. */
 export function makeRouter(): Router {
   const router = createRouter({ history: createWebHistory(), routes });
@@ -22,13 +34,7 @@ export function makeRouter(): Router {
   });
   router.beforeEach(async (to) => {
     if (to.meta.isPublic === true || store.session !== null) return true;
-    try {
-      store.set(await call('getSession'));
-      return true;
-    } catch (error) {
-      if (error instanceof ApiProblem) return signedOutAt(to);
-      throw error;
-    }
+    return (await loadSession()) || signedOutAt(to);
   });
   router.afterEach((to) => {
     document.title = to.meta.title === undefined ? 'Stillspan' : `${to.meta.title} · Stillspan`;

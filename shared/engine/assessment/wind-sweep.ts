@@ -1,3 +1,4 @@
+import { clampedWire, type ClampedWire } from '../ends/clamped-wire.ts';
 import type { PreparedEnd } from '../ends/prepare-end.ts';
 import { respondEnd, type ImpedanceStore } from '../ends/respond-end.ts';
 import { spanSetup, type SpanSetup } from '../span/span-setup.ts';
@@ -30,9 +31,11 @@ function cachedResponses(setup: SpanSetup, waves: WaveTable, reuse: EndResponseC
   const grid = [waves.frequenciesHz[0], waves.frequenciesHz.at(-1), waves.frequenciesHz.length];
   const wireKey = [massKgPerM, bendingStiffnessMinNm2, setup.tensionN, ...grid].join();
   const impedances: ImpedanceStore = new Map();
+  let wire: ClampedWire | null = null;
+  const clamped = () => (wire ??= clampedWire(waves));
   const respond = (end: PreparedEnd) =>
     reuse.obtain(endKey(end, wireKey), () =>
-      respondEnd(waves, end, { bendingStiffnessNm2: bendingStiffnessMinNm2, impedances }),
+      respondEnd(clamped(), end, { bendingStiffnessNm2: bendingStiffnessMinNm2, impedances }),
     );
   return [respond(setup.ends[0]), respond(setup.ends[1])];
 }

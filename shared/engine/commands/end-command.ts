@@ -1,3 +1,4 @@
+import { clampedWire } from '../ends/clamped-wire.ts';
 import { prepareEnd } from '../ends/prepare-end.ts';
 import { respondEnd } from '../ends/respond-end.ts';
 import type { EndResponse } from '../ends/end-response.ts';
@@ -76,7 +77,10 @@ export function endCommand(input: EndInput): CommandHead & { rows: EndRow[] } {
   const end = prepareEnd(input.end, { path: 'end', lengthM: reachM });
   const wire = { massKgPerM, tensionN: input.tensionN, bendingStiffnessNm2: bendingStiffnessMinNm2 };
   const waves = waveTable(wire, checkedFrequencies(input.frequenciesHz));
-  const response = respondEnd(waves, end, { bendingStiffnessNm2: bendingStiffnessMinNm2, impedances: new Map() });
+  const response = respondEnd(clampedWire(waves), end, {
+    bendingStiffnessNm2: bendingStiffnessMinNm2,
+    impedances: new Map(),
+  });
   const kinds = new Set(end.models.map((model) => model.kind));
   const names = [
     'waves-tensioned-beam',

@@ -1,7 +1,13 @@
 /** How the span's length follows from a trial. */
 export type LengthOf = (excessRatio: number) => number;
 
-/** Length is told to 1e-11, so the amplitude is: dlnB/dln L ≤ 2 for every curve with log-slope below 2. */
+/** First guess of s and of the slope of ln L against s (0: none); the slope is overwritten by the one found. */
+export interface ExcessTrial {
+  s: number;
+  slope: number;
+}
+
+/** The length is met to 1e-11, and so is B: dln B/dln L ≤ 2 for every curve with log-slope below 2. */
 const toleranceRatio = 1e-11;
 const stepLimitCount = 80;
 /** Beyond these the larger end is at the top amplitude, or the amplitude is nothing, to the last digit. */
@@ -15,16 +21,16 @@ const firstSlope = (s: number) => (s < 0 ? 0.5 : 1 / (2 + s));
  *
  * @param lengthOf length of wire for an excess, rising with s
  * @param spanLengthM L, scalar [m], > 0
- * @param startS first guess of s
+ * @param trial first guess; left with the slope at the root
  * @returns s, or Infinity if even the top amplitude needs less wire than L
  * @source closed form
  * @validity one root
- * @accuracy 1e-11 in the length
+ * @accuracy 1e-9 in the length: the last secant step is taken unseen where the two errors before it say that it is safe
  */
-export function findExcess(lengthOf: LengthOf, spanLengthM: number, startS: number): number {
+export function findExcess(lengthOf: LengthOf, spanLengthM: number, trial: ExcessTrial): number {
   let lower: number = excessRange.lowerS;
   let upper: number = excessRange.upperS;
-  let s = Math.min(Math.max(startS, lower), upper);
+  let s = Math.min(Math.max(trial.s, lower), upper);
   let before = NaN;
   let errorBefore = NaN;
   for (let step = 0; step < stepLimitCount; step += 1) {
@@ -33,8 +39,13 @@ export function findExcess(lengthOf: LengthOf, spanLengthM: number, startS: numb
     if (error < 0) lower = s;
     else upper = s;
     if (lower >= excessRange.upperS) return Infinity;
-    let next = s - error / (step === 0 ? firstSlope(s) : (error - errorBefore) / (s - before));
-    if (!(next > lower && next < upper)) next = nextInside({ lower, upper, s });
+    if (step > 0) trial.slope = (error - errorBefore) / (s - before);
+    else if (!(trial.slope > 0)) trial.slope = firstSlope(s);
+    let next = s - error / trial.slope;
+    const isInside = next > lower && next < upper;
+    // A secant step leaves about the product of both errors before it, times a curvature below 1.
+    if (isInside && Math.abs(error * errorBefore) <= toleranceRatio) return next;
+    if (!isInside) next = nextInside({ lower, upper, s });
     if (next === s || upper - lower < Number.EPSILON * Math.abs(s)) return s;
     before = s;
     errorBefore = error;

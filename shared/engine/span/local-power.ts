@@ -82,11 +82,12 @@ export function findPowerLawTop(power: LocalPower, top: TopAmplitude): boolean {
   if (piece.kind !== 'power') return false;
   const exponentGap = power.dampingExponentNumber - piece.exponentNumber;
   const ratio = (power.windScaleWPerM * piece.levelNumber) / power.dampingScaleWPerM;
-  const x = Math.pow(ratio, 1 / exponentGap);
-  top.xRatio = x;
+  // One logarithm and two exponentials cost less than two powers.
+  const logX = Math.log(ratio) / exponentGap;
+  top.xRatio = Math.exp(logX);
   top.isRoot = true;
   top.pieceIndex = 0;
-  top.windWPerM = power.dampingScaleWPerM * Math.pow(x, power.dampingExponentNumber);
+  top.windWPerM = power.dampingScaleWPerM * Math.exp(logX * power.dampingExponentNumber);
   top.netWPerM = 0;
   top.fallWPerM = exponentGap * top.windWPerM;
   return true;

@@ -1,11 +1,18 @@
 import { windPiece } from '../wind/wind-power-curve.ts';
-import { firstPanelZ, nearPole, panelGrowthRatio, panelRule, poleIntegral } from './span-integral.ts';
+import {
+  firstPanelZ,
+  nearPole,
+  panelGrowthRatio,
+  panelNodeLimitCount,
+  panelRule,
+  poleIntegral,
+} from './span-integral.ts';
 import type { SpanState } from './span-state.ts';
 
 const at = (values: Float64Array, index: number): number => values[index] as number; // index is always inside
 
 /** |Γ| is floored at 1e−6, so z ≤ 22.4 and a side has at most 6 panels. */
-const nodeLimitCount = 2 * 8 * panelRule.nodes.length;
+const nodeLimitCount = 2 * 8 * panelNodeLimitCount;
 
 /**
  * The span's length as a function of the excess when wind and damping are both plain powers of the amplitude over the
@@ -44,9 +51,10 @@ function addPanel(nodes: PowerLawNodes, panel: { from: number; to: number }, max
   const { windExponentNumber: a, exponentGapNumber: gap } = nodes;
   const scale = 1 / (1 + maxSquare);
   const width = panel.to - panel.from;
-  for (let index = 0; index < panelRule.nodes.length; index += 1) {
-    const z = panel.from + width * at(panelRule.nodes, index);
-    const weight = width * at(panelRule.weights, index);
+  const rule = panelRule(panel.from, panel.to);
+  for (let index = 0; index < rule.nodes.length; index += 1) {
+    const z = panel.from + width * at(rule.nodes, index);
+    const weight = width * at(rule.weights, index);
     const square = z * z;
     const c = 1 + square;
     const logRatio = Math.log1p((square - maxSquare) * scale);

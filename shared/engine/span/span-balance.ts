@@ -1,5 +1,5 @@
 import { amplitudeLimitRatio, windPiece, type WindPowerCurve } from '../wind/wind-power-curve.ts';
-import { excessRange, findExcess, type LengthOf } from './find-excess.ts';
+import { excessRange, findExcess, type ExcessTrial, type LengthOf } from './find-excess.ts';
 import { findPowerLawTop, findTopAmplitude } from './local-power.ts';
 import { powerLawLength, powerLawNodes, setPowerLawNodes, type PowerLawNodes } from './power-law-integral.ts';
 import { spanSums, type SpanSums } from './span-integral.ts';
@@ -12,6 +12,8 @@ export const reflectionFloorRatio = 1e-6;
 export const quietRatio = 1e-6;
 /** Both |u| below this: the ends take nothing and the amplitude is that of the wire alone. */
 const undampedU = 1e-9;
+/** The excess of neighbouring frequencies is carried straight on over steps of s up to this. */
+const guessStepLimit = 1;
 
 /** One span at one frequency. */
 export interface BalanceInput {
@@ -46,6 +48,8 @@ export interface BalanceSolver {
   readonly solution: BalanceSolution;
   /** Wire between both ends for an excess. */
   readonly lengthAt: LengthOf;
+  /** First guess for the next frequency. */
+  readonly trial: ExcessTrial;
   lastS: number;
 }
 
@@ -57,6 +61,7 @@ export function balanceSolver(curve: WindPowerCurve): BalanceSolver {
     sums: { lengthM: 0, windW: 0, dampingW: 0 },
     solution: { outcome: 'quiet', leftAmplitudeRatio: 0, rightAmplitudeRatio: 0, excessRatio: 0, plateauLengthM: 0 },
     lengthAt: (excessRatio) => spanLengthAt(solver, excessRatio),
+    trial: { s: 0, slope: 0 },
     lastS: 0,
   };
   return solver;
@@ -94,7 +99,7 @@ function store(solution: BalanceSolution, outcome: SpanOutcome, amplitudeRatio: 
 /** Solves for the excess below the top amplitude of the state and keeps the amplitudes. */
 function solveBelowTop(solver: BalanceSolver, spanLengthM: number): void {
   const { state, solution } = solver;
-  const s = findExcess(solver.lengthAt, spanLengthM, solver.lastS);
+  const s = findExcess(solver.lengthAt, spanLengthM, solver.trial);
   if (s === Infinity && !state.top.isRoot) {
     store(solution, 'amplitude-limit', amplitudeLimitRatio);
     return;
@@ -106,7 +111,11 @@ function solveBelowTop(solver: BalanceSolver, spanLengthM: number): void {
   solution.leftAmplitudeRatio = base * (1 + (state.endZ[0] as number) ** 2);
   solution.rightAmplitudeRatio = base * (1 + (state.endZ[1] as number) ** 2);
   solution.plateauLengthM = s === Infinity ? Math.max(spanLengthM - spanLengthAt(solver, excess), 0) : 0;
-  solver.lastS = s === Infinity ? 0 : s;
+  // A first guess for the next frequency: straight on, but no further than a short step.
+  const last = s === Infinity ? 0 : s;
+  const step = last - solver.lastS;
+  solver.trial.s = last + (Math.abs(step) < guessStepLimit ? step : 0);
+  solver.lastS = last;
 }
 
 /** Neither end takes anything: the whole wire swings at the top amplitude. */

@@ -1,10 +1,22 @@
-import { gaussLegendre } from '../numerics/gauss-legendre.ts';
+import { gaussLegendre, type QuadratureRule } from '../numerics/gauss-legendre.ts';
 import { windPiece, windPieceIndex, windPieceValue, type WindPowerPiece } from '../wind/wind-power-curve.ts';
 import type { SpanState } from './span-state.ts';
 
-/** Nodes per panel: six keep the integrals to 1e-9 on the panels of `nextEdge`, see the tests. */
-export const panelRule = gaussLegendre(6);
-const panelNodeCount = panelRule.nodes.length;
+/** Six nodes keep the integrals to 1e-9 on any panel of `nextEdge`; a short first panel needs fewer, see the tests. */
+const fullRule = gaussLegendre(6);
+const shortRules = [
+  { limitZ: 0.25, rule: gaussLegendre(4) },
+  { limitZ: 0.45, rule: gaussLegendre(5) },
+] as const;
+
+/** Largest number of nodes on one panel. */
+export const panelNodeLimitCount = fullRule.nodes.length;
+
+/** Rule for a panel: the nearest singularities, z = ±j, are the further away the shorter a panel from 0 is. */
+export function panelRule(from: number, to: number): QuadratureRule {
+  if (from > 0 || to > shortRules[1].limitZ) return fullRule;
+  return to > shortRules[0].limitZ ? shortRules[1].rule : shortRules[0].rule;
+}
 
 /** First panel edge and growth of the panels in z; the integrand's nearest singularities are z = ±j. */
 export const firstPanelZ = 0.7;
@@ -129,9 +141,10 @@ export function spanSums(state: SpanState, excessRatio: number, range: { limitZ:
     const pieceIndex = windPieceIndex(state.power.curve, baseRatio * (1 + ((from + to) / 2) ** 2));
     const piece = windPiece(state.power.curve, pieceIndex);
     node.isTop = pieceIndex === top.pieceIndex;
-    for (let index = 0; index < panelNodeCount; index += 1) {
-      const z = from + width * (panelRule.nodes[index] as number);
-      const weight = width * (panelRule.weights[index] as number);
+    const { nodes, weights } = panelRule(from, to);
+    for (let index = 0; index < nodes.length; index += 1) {
+      const z = from + width * (nodes[index] as number);
+      const weight = width * (weights[index] as number);
       const square = z * z;
       const c = 1 + square;
       node.y = logExcess - Math.log1p((square - maxSquare) / cm);

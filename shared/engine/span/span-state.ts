@@ -40,7 +40,8 @@ export function setSpanEnds(state: SpanState, leftRatio: number, rightRatio: num
   state.maxSquare = larger * larger;
 }
 
-/** z = √2·sinh(u/2) at u = −½ln|Γ|. */
+/** z = √2·sinh(u/2) at u = −½ln|Γ|, as (1 − g)/(√2·g^¼·(1 + √g)): no logarithm, and no digits lost as g = |Γ| → 1. */
 function endPosition(reflectionRatio: number): number {
-  return Math.SQRT2 * Math.sinh(-0.25 * Math.log(reflectionRatio));
+  const root = Math.sqrt(reflectionRatio);
+  return (1 - reflectionRatio) / (Math.SQRT2 * Math.sqrt(root) * (1 + root));
 }

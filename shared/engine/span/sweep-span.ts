@@ -1,4 +1,5 @@
 import { respondEnd, type ImpedanceStore } from '../ends/respond-end.ts';
+import { clampedWire } from '../ends/clamped-wire.ts';
 import type { EndResponse } from '../ends/end-response.ts';
 import { waveTable, type WaveTable } from '../waves/wave-table.ts';
 import { referenceDensityKgPerM3 } from '../wind/wind-power.ts';
@@ -53,7 +54,8 @@ export function respondEnds(
     frequenciesHz,
   );
   const from = { bendingStiffnessNm2, impedances: new Map() satisfies ImpedanceStore };
-  return { waves, responses: [respondEnd(waves, setup.ends[0], from), respondEnd(waves, setup.ends[1], from)] };
+  const clamped = clampedWire(waves);
+  return { waves, responses: [respondEnd(clamped, setup.ends[0], from), respondEnd(clamped, setup.ends[1], from)] };
 }
 
 function balanceInput(setup: SpanSetup): BalanceInput {
@@ -111,7 +113,7 @@ export function sweepSpan(
     input.impedanceNsPerM = waves.impedancesNsPerM[index] as number;
     input.angularFrequencyRadPerS = waves.angularFrequenciesRadPerS[index] as number;
     input.windScaleWPerM = windFactor * f * f * f;
-    input.dampingScaleWPerM = factor * Math.pow(f, frequencyExponentNumber);
+    input.dampingScaleWPerM = factor * Math.exp(frequencyExponentNumber * Math.log(f));
     input.leftReflectionRatio = responses[0].reflectionRatio[index] as number;
     input.rightReflectionRatio = responses[1].reflectionRatio[index] as number;
     const { outcome, leftAmplitudeRatio, rightAmplitudeRatio } = solveSpanBalance(solver, input);

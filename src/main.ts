@@ -1,6 +1,7 @@
 import { QueryClient, VueQueryPlugin } from '@tanstack/vue-query';
 import { createPinia } from 'pinia';
 import { Dialog, Notify, Quasar } from 'quasar';
+import svgIcons from 'quasar/icon-set/svg-material-icons';
 import 'quasar/dist/quasar.css';
 import '#src/theme/base.css';
 import { createApp } from 'vue';
@@ -22,7 +23,7 @@ const queryClient = new QueryClient({
 
 createApp(App)
   .use(createPinia())
-  .use(Quasar, { plugins: { Dialog, Notify } })
+  .use(Quasar, { iconSet: svgIcons, plugins: { Dialog, Notify } })
   .use(VueQueryPlugin, { queryClient })
   .use(makeRouter())
   .mount('#app');

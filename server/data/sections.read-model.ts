@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { gradeRankIndex, type Grade } from '#shared/contract/grades.ts';
+import { worstGrade } from '#shared/contract/grades.ts';
 import {
   sectionSpanSchema,
   sectionStructureSchema,
@@ -84,14 +84,6 @@ function readSpanWires(tx: UtilityTransaction, sectionId: string) {
   );
 }
 
-function worst(grades: readonly (Grade | null)[]): Grade | null {
-  const known = grades.filter((grade): grade is Grade => grade !== null);
-  return known.reduce<Grade | null>(
-    (top, grade) => (top === null || gradeRankIndex(grade) > gradeRankIndex(top) ? grade : top),
-    null,
-  );
-}
-
 /** A section with everything its page shows, or null. */
 export async function readSection(tx: UtilityTransaction, sectionId: string): Promise<Section | null> {
   const head = await readHead(tx, sectionId);
@@ -100,7 +92,7 @@ export async function readSection(tx: UtilityTransaction, sectionId: string): Pr
   const spanWires = await readSpanWires(tx, sectionId);
   return {
     ...head,
-    grade: worst(spanWires.map(({ grade }) => grade)),
+    grade: worstGrade(spanWires.map(({ grade }) => grade)),
     isStale: spanWires.some(({ isStale }) => isStale),
     structures: structures.sort((a, b) => a.chainageM - b.chainageM),
     spans: await readSpans(tx, sectionId),

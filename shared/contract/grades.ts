@@ -12,3 +12,12 @@ export const gradeLetters = { calm: 'C', notice: 'N', act: 'A', urgent: 'U' } as
 export function gradeRankIndex(grade: Grade): number {
   return grades.indexOf(grade);
 }
+
+/** The worst of some grades; null when none of them is assessed. */
+export function worstGrade(among: readonly (Grade | null)[]): Grade | null {
+  return among.reduce<Grade | null>(
+    (worst, grade) =>
+      grade !== null && (worst === null || gradeRankIndex(grade) > gradeRankIndex(worst)) ? grade : worst,
+    null,
+  );
+}

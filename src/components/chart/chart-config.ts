@@ -7,6 +7,7 @@ import { withAlpha } from './chart-palette.ts';
 
 const stackFillAlpha = 0.28;
 const markerEveryCount = 8;
+const markerShiftCount = 3;
 const axisFont = { family: 'Roboto, sans-serif', size: 12 };
 
 function datasetOf(series: ChartSeries, index: number, context: DatasetContext): ChartDataset<'line'> {
@@ -22,7 +23,10 @@ function datasetOf(series: ChartSeries, index: number, context: DatasetContext):
     borderDash: series.isDashed ? [7, 5] : [],
     pointStyle: series.marker === 'triangle' ? 'triangle' : 'circle',
     // Few enough markers to tell the lines apart, not so many that they hide them.
-    pointRadius: series.points.map((_, row) => (series.marker !== 'none' && row % markerEveryCount === 0 ? 4 : 0)),
+    // Each series starts elsewhere, so that one line does not hide another that runs along it.
+    pointRadius: series.points.map((_, row) =>
+      series.marker !== 'none' && (row + index * markerShiftCount) % markerEveryCount === 0 ? 4 : 0,
+    ),
     pointHoverRadius: 5,
     fill: series.isStacked ? (isFirstOfStack ? 'origin' : '-1') : false,
     stack: series.isStacked ? 'pile' : series.key,

@@ -101,9 +101,10 @@ function drawLimitTint(drawing: Drawing, model: ChartModel, palette: ChartPalett
 
 function drawLimitLines(drawing: Drawing, model: ChartModel, palette: ChartPalette): void {
   const { context, area } = drawing;
-  model.limits.forEach((limit) => {
+  const labelled: number[] = [];
+  for (const limit of model.limits) {
     const y = drawing.yPixel(limit.y);
-    if (y < area.top - 1 || y > area.bottom + 1) return;
+    if (y < area.top - 1 || y > area.bottom + 1) continue;
     context.save();
     context.strokeStyle = palette.limit;
     context.lineWidth = 1.5;
@@ -111,11 +112,18 @@ function drawLimitLines(drawing: Drawing, model: ChartModel, palette: ChartPalet
     context.moveTo(area.left, y);
     context.lineTo(area.right, y);
     context.stroke();
-    context.textAlign = 'right';
-    const labelY = y - 5 < area.top + labelHeightPx ? y + labelHeightPx : y - 5;
-    drawLabel(drawing, limit.label, { x: area.right - 6, y: labelY, ink: palette.limit, paper: palette.paper });
+    // Limits that lie close together have their names at opposite sides.
+    const isCrowded = labelled.some((other) => Math.abs(other - y) < 2 * labelHeightPx);
+    labelled.push(y);
+    context.textAlign = isCrowded ? 'left' : 'right';
+    drawLabel(drawing, limit.label, {
+      x: isCrowded ? area.left + 6 : area.right - 6,
+      y: y - 5 < area.top + labelHeightPx ? y + labelHeightPx : y - 5,
+      ink: palette.limit,
+      paper: palette.paper,
+    });
     context.restore();
-  });
+  }
 }
 
 /** Each line is named above its highest point; names that would overlap move down. */

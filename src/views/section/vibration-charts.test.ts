@@ -59,6 +59,21 @@ describe('energyChart', () => {
   });
 });
 
+describe('what the wire or its ends lack', () => {
+  it('shows the limit of damper clamps only where an end has dampers', () => {
+    const bare = aSeriesRow({ reflectionRatio: [1, 1] });
+    const limitsOf = (row: typeof bare) =>
+      stressChart(aVibrationSource({ rows: [row], damperedLimitStressPa: 5e6 })).limits.length;
+    expect(limitsOf(bare)).toBe(1);
+    expect(limitsOf(aSeriesRow({ reflectionRatio: [1, 0.8] }))).toBe(2);
+  });
+
+  it('says why there is no balance at the amplitude limit', () => {
+    const limited = aSeriesRow({ outcome: 'amplitude-limit', windPowerW: null, selfDampingPowerW: null });
+    expect(energyChart(aVibrationSource({ rows: [limited] })).gaps[0]?.reason).toContain('amplitude at its limit');
+  });
+});
+
 describe('reflectionChart', () => {
   it('keeps the end that has data where only the other has none', () => {
     const chart = reflectionChart(aVibrationSource({ rows: [aSeriesRow(withoutData)] }));

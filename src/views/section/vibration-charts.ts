@@ -52,13 +52,19 @@ function overWind(
 interface GapRule {
   readonly toX: (row: Row) => number;
   readonly holds: (row: Row) => boolean;
+  readonly reason: (from: string, to: string) => string;
 }
+
+const noDamperData = (from: string, to: string) => `no damper data ${from} to ${to}`;
 
 function gapsOf({ series, scales }: VibrationSource, rule: GapRule): ChartGap[] {
   return rangesWhere(series.rows, rule.holds).map(({ first, last, before, after }) => ({
     fromX: rule.toX(before),
     toX: rule.toX(after),
-    reason: `no damper data ${quantityText(scales.frequency, first.frequencyHz)} to ${quantityText(scales.frequency, last.frequencyHz)}`,
+    reason: rule.reason(
+      quantityText(scales.frequency, first.frequencyHz),
+      quantityText(scales.frequency, last.frequencyHz),
+    ),
   }));
 }
 
@@ -66,6 +72,15 @@ const windGaps = (source: VibrationSource) =>
   gapsOf(source, {
     toX: (row) => source.scales.windSpeed.shown(row.windSpeedMPerS),
     holds: (row) => row.outcome === 'no-damper-data',
+    reason: noDamperData,
+  });
+
+/** At its amplitude limit the wire has no balance that closes: the wind could drive it further. */
+const unbalancedGaps = (source: VibrationSource) =>
+  gapsOf(source, {
+    toX: (row) => source.scales.windSpeed.shown(row.windSpeedMPerS),
+    holds: (row) => row.outcome === 'amplitude-limit',
+    reason: () => 'amplitude at its limit: no balance',
   });
 
 const place = ({ spanLabel, wireName }: VibrationSource) => `span ${spanLabel}, wire ${wireName}`;
@@ -82,6 +97,11 @@ const clampStressPa = (row: Row): number | null => {
   return stressesPa.length === 0 ? null : Math.max(...stressesPa);
 };
 
+/** Only a damper takes anything out of a wave at an end. */
+const lossless = 0.9999;
+const hasDampers = (rows: readonly Row[]) =>
+  rows.some((row) => row.reflectionRatio.some((ratio) => ratio === null || ratio < lossless));
+
 function stressLimits({ series, scales }: VibrationSource): ChartLimit[] {
   const limit = (text: string, stressPa: number | null): ChartLimit[] =>
     stressPa === null
@@ -89,7 +109,7 @@ function stressLimits({ series, scales }: VibrationSource): ChartLimit[] {
       : [{ label: `${text} ${quantityText(scales.stress, stressPa)}`, y: scales.stress.shown(stressPa) }];
   return [
     ...limit('Limit', series.limitStressPa),
-    ...limit('Limit where dampers are fitted', series.damperedLimitStressPa),
+    ...limit('Limit where dampers are fitted', hasDampers(series.rows) ? series.damperedLimitStressPa : null),
   ];
 }
 
@@ -181,9 +201,12 @@ export function energyChart(source: VibrationSource): ChartModel {
       },
     ],
     limits: [],
-    gaps: windGaps(source),
+    gaps: [...windGaps(source), ...unbalancedGaps(source)],
   };
 }
+
+/** A little above 1, so that the line of an end without dampers is not cut in half. */
+const reflectionShownMost = 1.05;
 
 /** Size of the reflected wave at both ends against frequency. */
 export function reflectionChart(source: VibrationSource): ChartModel {
@@ -194,12 +217,16 @@ export function reflectionChart(source: VibrationSource): ChartModel {
     summary: `Share of a wave’s amplitude that comes back from each end against frequency, ${place(source)}; 1 means that the end takes nothing.`,
     fileStem: fileStem(source, 'reflection'),
     xAxis: axis('Frequency', scales.frequency),
-    yAxis: axis('Reflected amplitude over arriving', scales.ratio, { lower: 0, upper: 1 }),
+    yAxis: axis('Reflected amplitude over arriving', scales.ratio, { lower: 0, upper: reflectionShownMost }),
     series: ([0, 1] as const).map((end) => ({
       ...endLook(source, end),
       points: series.rows.map((row) => ({ x: toX(row), y: row.reflectionRatio[end] })),
     })),
     limits: [],
-    gaps: gapsOf(source, { toX, holds: (row) => row.reflectionRatio.every((ratio) => ratio === null) }),
+    gaps: gapsOf(source, {
+      toX,
+      holds: (row) => row.reflectionRatio.every((ratio) => ratio === null),
+      reason: noDamperData,
+    }),
   };
 }

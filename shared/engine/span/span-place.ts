@@ -16,7 +16,7 @@ export interface SpanPlace {
 }
 
 const stepLimitCount = 60;
-const toleranceRatio = 1e-12;
+const lastStepRatio = 1e-7;
 
 /** Energies and lengths of a solved, steady span. */
 export interface SpanEnergy {
@@ -93,11 +93,13 @@ function zAtLength(solver: BalanceSolver, side: 0 | 1, at: { lengthM: number; si
   for (let step = 0; step < stepLimitCount; step += 1) {
     spanSums(state, solution.excessRatio, { limitZ: z, sums });
     const error = sums.lengthM - at.lengthM;
-    if (Math.abs(error) <= toleranceRatio * at.sideM) return z;
     if (error < 0) lower = z;
     else upper = z;
     let next = z - error / spanDensity(state, solution.excessRatio, z);
-    if (!(next > lower && next < upper)) next = (lower + upper) / 2;
+    const isInside = next > lower && next < upper;
+    // Newton's step squares the error, so this one lands within 1e-12.
+    if (Math.abs(error) <= lastStepRatio * at.sideM && (isInside || error === 0)) return next;
+    if (!isInside) next = (lower + upper) / 2;
     if (next === z) return z;
     z = next;
   }

@@ -15,20 +15,22 @@ import { caseSetup, sweepAt, windSweep } from './wind-sweep.ts';
 /** @source own model: fewer sectors stand badly for the directions between them */
 const coarseSectorCount = 8;
 
-/** Worst stress at the clamp of an end over the points of a sweep. */
-function worstAtClamp(
+type ClampWorst = { readonly stressPa: number; readonly frequencyHz: number };
+
+/** Worst stress at the clamp of an end: over the points of the sweep, or the search's own where it is that clamp. */
+function endWorst(
   setup: SpanSetup,
-  sweep: SpanSweep,
-  end: 0 | 1,
-): { stressPa: number; frequencyHz: number } | null {
+  { sweep, worst, end }: { readonly sweep: SpanSweep; readonly worst: WorstPlace | null; readonly end: 0 | 1 },
+): ClampWorst | null {
   const factor = stressPerCurvature(setup);
   const curvatures = sweep.responses[end].clampCurvaturePerM2;
-  let worst: { stressPa: number; frequencyHz: number } | null = null;
+  const isFound = worst !== null && worst.endIndex === end && worst.place === 'clamp';
+  let most: ClampWorst | null = isFound ? { stressPa: worst.stressPa, frequencyHz: worst.frequencyHz } : null;
   for (let index = 0; index < sweep.frequenciesHz.length; index += 1) {
     const stressPa = factor * (curvatures[index] as number) * (sweep.endAmplitudesM[end][index] as number);
-    if (stressPa > (worst?.stressPa ?? 0)) worst = { stressPa, frequencyHz: sweep.frequenciesHz[index] as number };
+    if (stressPa > (most?.stressPa ?? 0)) most = { stressPa, frequencyHz: sweep.frequenciesHz[index] as number };
   }
-  return worst;
+  return most;
 }
 
 /** The balance once more at the worst frequency, with its energies. */
@@ -140,7 +142,7 @@ export function assessSpanWire(
   return {
     outcome,
     worst,
-    endWorst: [worstAtClamp(setup, sweep, 0), worstAtClamp(setup, sweep, 1)],
+    endWorst: [endWorst(setup, { sweep, worst, end: 0 }), endWorst(setup, { sweep, worst, end: 1 })],
     exceedance: exceedanceOf(setup, search),
     endAbsorbedRatioAtWorst: [absorbed(0), absorbed(1)],
     energyAtWorst: energyOf(detail?.energy ?? null),

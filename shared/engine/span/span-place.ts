@@ -137,5 +137,5 @@ export function fluxAt({ state, solution }: BalanceSolver, place: SpanPlace): nu
   const z2 = place.z * place.z;
   const baseRatio = state.top.xRatio / ((1 + state.maxSquare) * (1 + solution.excessRatio));
   const size = state.fluxScaleW * baseRatio * baseRatio * place.z * Math.sqrt(2 + z2) * (1 + z2);
-  return place.sideIndex === 0 ? -size : size;
+  return place.sideIndex === 0 && size > 0 ? -size : size;
 }

@@ -18,8 +18,8 @@ export function listAudit(tx: UtilityTransaction, query: QueryOf<typeof peopleRo
     where,
     bindings: { thingKind: query.thingKind ?? null, thingId: query.thingId ?? null },
     key: { expression: 'audit_log.id', type: 'bigint', direction: 'descending' },
-    // The key is unique already; the cursor's id only has to be a uuid.
-    id: 'audit_log.utility_id',
+    id: 'audit_log.id',
+    idType: 'bigint',
     countFrom: null,
   });
 }

@@ -16,10 +16,14 @@ export interface KeysetList<S extends z.ZodType> {
   readonly schema: S;
   readonly columns: string;
   readonly from: string;
+  /** Fewer tables that suffice for order and conditions; the others are then joined for the rows of the page only. */
+  readonly pickFrom?: string;
   readonly where: readonly string[];
   readonly bindings: NonNullable<Bindings>;
   readonly key: { readonly expression: string; readonly type: string; readonly direction: 'ascending' | 'descending' };
   readonly id: string;
+  /** Type of the id column; uuid unless told otherwise. */
+  readonly idType?: 'uuid' | 'bigint';
   /** From-clause whose rows are counted with the same conditions; null when counting costs too much. */
   readonly countFrom: string | null;
 }
@@ -38,11 +42,14 @@ function readCursor(cursor: string): z.infer<typeof cursorSchema> {
   }
 }
 
-function afterCursor(key: KeysetList<z.ZodType>['key'], id: string, value: string | number | null): string {
-  if (value === null) return `(${key.expression} is null and ${id} > :cursorId::uuid)`;
+function afterCursor(
+  { key, id, idType = 'uuid' }: Pick<KeysetList<z.ZodType>, 'key' | 'id' | 'idType'>,
+  value: string | number | null,
+): string {
+  if (value === null) return `(${key.expression} is null and ${id} > :cursorId::${idType})`;
   const beyond = key.direction === 'ascending' ? '>' : '<';
   const bound = `:cursorKey::${key.type}`;
-  return `(${key.expression} ${beyond} ${bound} or (${key.expression} = ${bound} and ${id} > :cursorId::uuid) or ${key.expression} is null)`;
+  return `(${key.expression} ${beyond} ${bound} or (${key.expression} = ${bound} and ${id} > :cursorId::${idType}) or ${key.expression} is null)`;
 }
 
 const keySchema = z.union([z.string(), z.number(), z.null()]);
@@ -61,7 +68,7 @@ export async function keysetPage<S extends z.ZodType>(
   };
   if (page.cursor !== undefined) {
     const [cursorKey, cursorId] = readCursor(page.cursor);
-    conditions.push(afterCursor(list.key, list.id, cursorKey));
+    conditions.push(afterCursor(list, cursorKey));
     Object.assign(bindings, { cursorKey, cursorId });
   }
   const where = conditions.length === 0 ? '' : `where ${conditions.join(' and ')}`;
@@ -73,10 +80,16 @@ export async function keysetPage<S extends z.ZodType>(
     context.addIssue({ code: 'custom', message: String(item.error ?? cursor.error) });
     return z.NEVER;
   });
+  const { expression } = list.key;
   const rows = await tx.rows(
     both,
-    `select ${list.columns}, (${list.key.expression})::text as cursor_key, ${list.id} as cursor_id
-     from ${list.from} ${where} order by ${list.key.expression} ${order} nulls last, ${list.id} limit :limitCount`,
+    `select ${list.columns}, picked.cursor_key, picked.cursor_id
+     from (
+       select (${expression})::text as cursor_key, ${list.id} as cursor_id, ${expression} as sort_key
+       from ${list.pickFrom ?? list.from} ${where} order by ${expression} ${order} nulls last, ${list.id} limit :limitCount
+     ) as picked, ${list.from}
+     where ${list.id} = picked.cursor_id 
+     order by picked.sort_key ${order} nulls last, picked.cursor_id`,
     bindings,
   );
   const shown = rows.slice(0, page.limitCount);

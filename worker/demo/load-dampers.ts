@@ -69,12 +69,12 @@ async function loadFitted(tx: UtilityTransaction): Promise<void> {
     const damperTypeId = await damperTypeIdOf(tx, rule.damperType);
     for (const spanWire of await spanWiresOf(tx, rule.line)) {
       if (!rule.wires.includes(spanWire.wireName) || !isChosen(spanWire.spanIndex, rule.spansPerHundredCount)) continue;
-      for (const side of sides) {
-        const isBad =
-          rule.line === badlyPlaced.line &&
-          spanWire.spanIndex === badlyPlaced.spanIndex &&
-          spanWire.wireName === badlyPlaced.wire &&
-          side === badlyPlaced.side;
+      // The badly placed damper stands alone on its span wire, so that what it fails to absorb shows.
+      const isBad =
+        rule.line === badlyPlaced.line &&
+        spanWire.spanIndex === badlyPlaced.spanIndex &&
+        spanWire.wireName === badlyPlaced.wire;
+      for (const side of isBad ? [badlyPlaced.side] : sides) {
         const distanceM = isBad ? badlyPlaced.distanceM : rule.distanceM;
         await place(tx, {
           spanWire,

@@ -34,7 +34,7 @@ const branchOptions: ImportOptions = {
         conductorName: 'Linnet',
         conductorStandard: 'ABNT NBR 7270',
         phaseWireCount: 3,
-        tensionRatedRatio: 0.18,
+        tensionRatedRatio: 0.1,
         structureHeightM: 14,
       },
     ],

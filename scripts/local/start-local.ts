@@ -153,6 +153,15 @@ async function startEverything(): Promise<void> {
   announce(installation, logs);
 }
 
+/** npm does not pass every signal on; when it is gone, so is the person who could press Ctrl-C. */
+function stopWithParent(): void {
+  const parent = process.ppid;
+  setInterval(() => {
+    if (process.ppid !== parent) void stopAll(0);
+  }, 1000).unref();
+}
+
+stopWithParent();
 for (const signal of ['SIGINT', 'SIGTERM', 'SIGHUP'] as const) process.on(signal, () => void stopAll(0));
 try {
   await startEverything();

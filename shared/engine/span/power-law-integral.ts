@@ -6,6 +6,7 @@ import {
   panelNodeLimitCount,
   panelRule,
   poleIntegral,
+  poleShape,
 } from './span-integral.ts';
 import type { SpanState } from './span-state.ts';
 
@@ -106,8 +107,7 @@ export function powerLawLength(nodes: PowerLawNodes, state: SpanState, excessRat
   const amplitudeFactor = Math.exp((2 - nodes.windExponentNumber) * logShrink);
   const gap = cm * excessRatio;
   const cp = cm + gap;
-  const near = nearPole(excessRatio);
-  const strength = (near * shrink * shrink * 2 * (2 * cp * cp - 1) * cp) / (Math.sqrt(1 + cp) * exponentGapNumber);
+  const strength = nearPole(excessRatio) * poleShape(cp) * shrink * shrink * (cp / exponentGapNumber);
   let sum = 0;
   let taken = 0;
   for (let index = 0; index < count; index += 1) {

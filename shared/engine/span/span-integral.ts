@@ -46,10 +46,20 @@ interface NodePower {
   dampingWPerM: number;
 }
 
+/** Beyond this the factor below is nothing, and the pole's strength would overflow. */
+const vanishedPoleRatio = 1e6;
+
 /** Takes a pole out of the subtraction, smoothly, when it lies far beyond the end: then it needs none. */
 export function nearPole(gapRatio: number): number {
+  if (gapRatio > vanishedPoleRatio) return 0;
   const square = gapRatio * gapRatio;
   return 1 / (1 + square * square);
+}
+
+/** 2(2c² − 1)/√(1 + c) at the pole's c = cosh u, held where it can no longer matter. */
+export function poleShape(c: number): number {
+  const held = Math.min(c, vanishedPoleRatio ** 2);
+  return (2 * (2 * held * held - 1)) / Math.sqrt(1 + held);
 }
 
 /**
@@ -63,7 +73,7 @@ function findPole({ top, fluxScaleW, maxSquare }: SpanState, excessRatio: number
   if (!(top.fallWPerM > 0) || beyondRatio > farPoleRatio) return { gap: cm, strengthM: 0 };
   const cp = cm + gap;
   const baseRatio = top.xRatio / (cm * (1 + excessRatio));
-  const shape = (2 * (2 * cp * cp - 1) * nearPole(gap / cm)) / Math.sqrt(1 + cp);
+  const shape = poleShape(cp) * nearPole(gap / cm);
   return { gap, strengthM: (fluxScaleW * baseRatio * top.xRatio * shape) / top.fallWPerM };
 }
 

@@ -9,6 +9,7 @@ import {
   EngineInputError,
   spanCommand,
   wavesCommand,
+  type SpanWireCase,
 } from '#shared/engine/index.ts';
 import { aBasis } from './engine-cases.ts';
 

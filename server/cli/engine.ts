@@ -2,6 +2,7 @@ import { z } from 'zod';
 import {
   damperOutputSchema,
   endOutputSchema,
+  lifeOutputSchema,
   spanOutputSchema,
   wavesOutputSchema,
 } from '#shared/contract/engine-output.ts';
@@ -11,8 +12,21 @@ import {
   pointerOfEnginePath,
   type EngineProblem,
 } from '#shared/contract/engine-problem.ts';
-import { damperInputSchema, endInputSchema, spanInputSchema, wavesInputSchema } from '#shared/contract/engine.ts';
-import { EngineInputError, damperCommand, endCommand, spanCommand, wavesCommand } from '#shared/engine/index.ts';
+import {
+  damperInputSchema,
+  endInputSchema,
+  lifeInputSchema,
+  spanInputSchema,
+  wavesInputSchema,
+} from '#shared/contract/engine.ts';
+import {
+  EngineInputError,
+  damperCommand,
+  endCommand,
+  lifeCommand,
+  spanCommand,
+  wavesCommand,
+} from '#shared/engine/index.ts';
 
 /** One command of the engine: what it takes, what it gives, and how a document is answered. */
 interface EngineCommand {
@@ -69,6 +83,11 @@ const engineCommands: Readonly<Record<string, EngineCommand>> = {
     'Steady aeolian vibration of a span at given frequencies',
     { input: spanInputSchema, output: spanOutputSchema },
     spanCommand,
+  ),
+  life: command(
+    'Fatigue life from a wind climate or from a recorder',
+    { input: lifeInputSchema, output: lifeOutputSchema },
+    lifeCommand,
   ),
 };
 

@@ -78,3 +78,27 @@ export const spanOutputSchema = z.object({
     }),
   ),
 });
+
+/** Output of the engine's `life` command. */
+export const lifeOutputSchema = z.object({
+  ...head,
+  life: z.discriminatedUnion('outcome', [
+    z.object({ outcome: z.literal('finite'), years: z.number(), damagePerYearRatio: z.number() }),
+    z.object({ outcome: z.literal('unlimited') }),
+    z.object({ outcome: z.literal('no-climate') }),
+  ]),
+  damagePerYearRatio: z.number(),
+  maxStressPa: z.number(),
+  endIndex: z.number().int().nullable(),
+  damperIndex: z.number().int().nullable(),
+  bins: z.array(
+    z.object({
+      frequencyHz: z.number(),
+      stressPa: z.number(),
+      cyclesPerYearCount: z.number(),
+      damagePerYearRatio: z.number(),
+      windSpeedMPerS: z.number().optional(),
+      hoursPerYearCount: z.number().optional(),
+    }),
+  ),
+});

@@ -136,3 +136,54 @@ export const spanInputSchema = z.strictObject({
   methods: engineMethodsSchema.optional(),
   curves: engineCurvesSchema.optional(),
 });
+
+const sectorSchema = z.strictObject({
+  directionRad: finite().describe('Direction the wind comes from, from true north, rad'),
+  shareRatio: finite().min(0).max(1),
+  weibullScaleMPerS: finite().positive('must be above 0').max(60),
+  weibullShapeNumber: finite().min(0.3).max(20),
+});
+const fatigueCurveSchema = z.enum(['multi-layer', 'single-layer']).describe('Safe border line of the conductor');
+const windBandSchema = z.strictObject({ lowerMPerS: finite().min(0.1).max(40), upperMPerS: finite().min(0.1).max(40) });
+const caseFields = {
+  schema: schemaName,
+  wire: engineWireSchema,
+  span: z.strictObject({ ...spanFields, bearingRad: spanFields.bearingRad.unwrap() }),
+  air: engineAirSchema,
+  ends: z.tuple([engineEndSchema, engineEndSchema]),
+  windBand: windBandSchema.optional().describe('1 to 7 m/s when left out'),
+  frequencyCount: z.number().int().min(2).max(5000).optional(),
+  methods: engineMethodsSchema.optional(),
+  curves: engineCurvesSchema.optional(),
+};
+
+/** Input of the engine's `life` command. */
+export const lifeInputSchema = z.discriminatedUnion('from', [
+  z.strictObject({
+    ...caseFields,
+    from: z.literal('climate'),
+    climate: z.strictObject({ sectors: z.array(sectorSchema).min(1).max(360) }),
+    fatigueCurve: fatigueCurveSchema,
+  }),
+  z.strictObject({
+    schema: schemaName,
+    from: z.literal('recorder'),
+    wire: engineWireSchema,
+    tensionN: tension,
+    fatigueCurve: fatigueCurveSchema,
+    recorder: z.strictObject({
+      durationS: finite().min(1).describe('Time over which cycles were counted, s'),
+      distanceM: finite().min(0.01).max(1).optional().describe('From the last point of contact; 0.089 m when left out'),
+      cells: z
+        .array(
+          z.strictObject({
+            frequencyHz: finite().positive('must be above 0').max(1000),
+            bendingAmplitudePkPkM: finite().min(0).max(0.02),
+            cycleCount: finite().min(0),
+          }),
+        )
+        .min(1)
+        .max(20_000),
+    }),
+  }),
+]);

@@ -12,6 +12,8 @@ export type { ClimateSector, WindClimate } from './climate/wind-climate.ts';
 export { yearlyCycles } from './climate/yearly-cycles.ts';
 export { damperCommand } from './commands/damper-command.ts';
 export { endCommand } from './commands/end-command.ts';
+export { lifeCommand } from './commands/life-command.ts';
+export type { LifeInput, LifeOutput } from './commands/life-command.ts';
 export { spanCommand } from './commands/span-command.ts';
 export { wavesCommand } from './commands/waves-command.ts';
 export type { DamperHalf, DamperModel, ImpedanceRow } from './dampers/damper-model.ts';
@@ -21,6 +23,8 @@ export { absorbedShare, inverseStandingWaveRatio, nodePower, standingWaveRatio }
 export { stringEndReflection } from './ends/string-end-reflection.ts';
 export { fatigueCrossing, fatigueCycles, fatigueStress, safeBorderLines } from './life/fatigue-curve.ts';
 export type { FatigueCurve } from './life/fatigue-curve.ts';
+export { recorderLife } from './life/recorder-life.ts';
+export type { RecorderMatrix } from './life/recorder-life.ts';
 export { minerDamage } from './life/miner-damage.ts';
 export type { MethodChoice, PartialMethodChoice } from './methods/method-choice.ts';
 export type { EngineWarning, MethodNote, MethodStanding } from './methods/method-note.ts';

@@ -111,6 +111,14 @@ const fixed: readonly MethodEntry[] = [
     'Bending strain of the outer strand, half its diameter times the curvature at the clamp with EImin',
     'rigid clamp; strands free to slip',
   ]),
+  entry(['fixed', 'strain-poffenberger-swart', false], 'from memory', [
+    'Bending strain from the bending amplitude 89 mm from the last point of contact, Poffenberger and Swart (1965); formula recalled, re-derived',
+    'rigid clamp; doubtful for compact conductors',
+  ]),
+  entry(['fixed', 'life-recorder', false], 'common practice', [
+    'Miner’s sum over the cycles a recorder counted, carried on to a year; safe border lines of CIGRE from memory',
+    'the time of recording stands for the year',
+  ]),
   entry(['fixed', 'damper-halves', false], 'closed form', [
     'Damper as clamp mass and halves with two freedoms each, hysteretic loss in the messenger',
     'the amplitude at which stiffness and loss were measured',

@@ -23,6 +23,8 @@ export function formatQuantity(
   options: { readonly system: UnitSystem; readonly significantCount?: number },
 ): string {
   if (value === null || value === undefined || !Number.isFinite(value)) return noValue;
+  // The digits of a life that is nearly over say nothing.
+  if (kind === 'life' && value < 1) return 'under 1 year';
   const text = formatNumber(convertQuantity(value, kind, options.system), options.significantCount);
   const label = unitLabel(kind, options.system);
   return label === '' ? text : `${text}${thinSpace}${label}`;

@@ -123,20 +123,23 @@ export function drawStructures(group: leaflet.LayerGroup, structures: Structures
   }
 }
 
-export function drawTerrain(
-  group: leaflet.LayerGroup,
-  terrain: Terrain,
-  drawing: Pick<LineDrawing, 'palette' | 'renderer'>,
-): void {
+type GroundDrawing = Pick<LineDrawing, 'palette' | 'renderer'>;
+type Rings = readonly (readonly (readonly (readonly number[])[])[])[];
+
+/** Ground lies on a canvas of its own below the lines: on theirs, it would catch the clicks. */
+function drawGround(group: leaflet.LayerGroup, polygons: Rings, style: leaflet.PolylineOptions): void {
+  const rings = polygons.map((polygon) => polygon.map((ring) => path(ring)));
+  leaflet.polygon(rings, { fillOpacity: 1, weight: 1, interactive: false, ...style }).addTo(group);
+}
+
+export function drawLand(group: leaflet.LayerGroup, polygons: Rings, { palette, renderer }: GroundDrawing): void {
+  drawGround(group, polygons, { fillColor: palette.land, color: palette.landEdge, renderer });
+}
+
+export function drawTerrain(group: leaflet.LayerGroup, terrain: Terrain, { palette, renderer }: GroundDrawing): void {
   group.clearLayers();
   for (const { geometry, properties } of terrain.features) {
-    const rings = geometry.coordinates.map((polygon) => polygon.map((ring) => path(ring)));
-    const fill = {
-      fillColor: terrainFill(properties.roughnessM, drawing.palette),
-      fillOpacity: 1,
-      color: drawing.palette.landEdge,
-      weight: 1,
-    };
-    leaflet.polygon(rings, { ...fill, renderer: drawing.renderer, interactive: false }).addTo(group);
+    const fillColor = terrainFill(properties.roughnessM, palette);
+    drawGround(group, geometry.coordinates, { fillColor, color: palette.landEdge, renderer });
   }
 }

@@ -1,8 +1,10 @@
 import { useDebounceFn, useMutationObserver } from '@vueuse/core';
 import * as leaflet from 'leaflet';
 import { computed, shallowRef, watch, type ShallowRef } from 'vue';
+import { z } from 'zod';
 import type { Grade } from '#shared/contract/grades.ts';
-import { drawSections, drawSpans, drawStructures, drawTerrain, type LineDrawing } from './draw-layers.ts';
+import { multiPolygonSchema } from '#shared/contract/map.ts';
+import { drawLand, drawSections, drawSpans, drawStructures, drawTerrain, type LineDrawing } from './draw-layers.ts';
 import { readMapPalette, type MapPalette } from './line-style.ts';
 import { useMapSections, useMapSpans, useMapStructures, useMapTerrain } from './queries.ts';
 
@@ -36,12 +38,14 @@ function roundedBox(bounds: leaflet.LatLngBounds): string {
     .join(',');
 }
 
-async function drawWorld(group: leaflet.LayerGroup, palette: MapPalette): Promise<void> {
+const worldSchema = z.object({ features: z.array(z.object({ geometry: multiPolygonSchema })) });
+
+async function drawWorld(group: leaflet.LayerGroup, palette: MapPalette, renderer: leaflet.Renderer): Promise<void> {
   const response = await fetch('/world-land.json');
   if (!response.ok) return;
-  const style = { fillColor: palette.land, fillOpacity: 1, color: palette.landEdge, weight: 1 };
+  const world = worldSchema.parse(await response.json());
   group.clearLayers();
-  leaflet.geoJSON(await response.json(), { style: () => style, interactive: false }).addTo(group);
+  for (const { geometry } of world.features) drawLand(group, geometry.coordinates, { palette, renderer });
 }
 
 function makeGroups(instance: leaflet.Map): Groups {
@@ -99,7 +103,7 @@ export function useNetworkLayers(map: Readonly<ShallowRef<leaflet.Map | null>>, 
   watch([groups, palette], () => {
     if (groups.value === null || palette.value === null) return;
     // Without the outline the map is only plainer.
-    void drawWorld(groups.value.land, palette.value).catch(() => undefined);
+    void drawWorld(groups.value.land, palette.value, groundRenderer).catch(() => undefined);
   });
   watch([groups, drawing, terrain.data], () => {
     if (groups.value === null || drawing.value === null || terrain.data.value === undefined) return;

@@ -9,6 +9,8 @@ export function useBoxPick(
   onBox: (bounds: leaflet.LatLngBounds) => void,
 ) {
   const isBoxTool = shallowRef(false);
+  // An SVG lets clicks through; another canvas above the lines would swallow them.
+  const renderer = leaflet.svg();
   let rectangle: leaflet.Rectangle | null = null;
   let from: leaflet.LatLng | null = null;
 
@@ -18,7 +20,7 @@ export function useBoxPick(
     from = event.latlng;
     instance.dragging.disable();
     rectangle = leaflet
-      .rectangle(leaflet.latLngBounds(from, from), { className: 'pick-box', interactive: false })
+      .rectangle(leaflet.latLngBounds(from, from), { className: 'pick-box', interactive: false, renderer })
       .addTo(instance);
   }
 

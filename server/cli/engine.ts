@@ -3,6 +3,7 @@ import {
   damperOutputSchema,
   endOutputSchema,
   lifeOutputSchema,
+  placeOutputSchema,
   spanOutputSchema,
   wavesOutputSchema,
 } from '#shared/contract/engine-output.ts';
@@ -16,6 +17,7 @@ import {
   damperInputSchema,
   endInputSchema,
   lifeInputSchema,
+  placeInputSchema,
   spanInputSchema,
   wavesInputSchema,
 } from '#shared/contract/engine.ts';
@@ -24,6 +26,7 @@ import {
   damperCommand,
   endCommand,
   lifeCommand,
+  placeCommand,
   spanCommand,
   wavesCommand,
 } from '#shared/engine/index.ts';
@@ -88,6 +91,11 @@ const engineCommands: Readonly<Record<string, EngineCommand>> = {
     'Fatigue life from a wind climate or from a recorder',
     { input: lifeInputSchema, output: lifeOutputSchema },
     lifeCommand,
+  ),
+  place: command(
+    'Best dampers and distances for each number of dampers per end',
+    { input: placeInputSchema, output: placeOutputSchema },
+    placeCommand,
   ),
 };
 

@@ -102,3 +102,25 @@ export const lifeOutputSchema = z.object({
     }),
   ),
 });
+
+/** Output of the engine's `place` command. */
+export const placeOutputSchema = z.object({
+  ...head,
+  trialCount: z.number().int(),
+  choices: z.array(
+    z.object({
+      damperCount: z.number().int(),
+      dampers: z.array(z.object({ catalogueIndex: z.number().int(), name: z.string(), distanceM: z.number() })),
+      worstUtilisationRatio: z.number(),
+      worstStressPa: z.number(),
+      plannedUtilisationRatio: z.number(),
+      isWorthwhile: z.boolean(),
+      reasons: z.array(
+        z.object({
+          tensionN: z.number(),
+          rows: z.array(z.object({ frequencyHz: z.number(), absorbedRatio: z.number(), utilisationRatio: z.number() })),
+        }),
+      ),
+    }),
+  ),
+});

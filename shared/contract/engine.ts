@@ -187,3 +187,42 @@ export const lifeInputSchema = z.discriminatedUnion('from', [
     }),
   }),
 ]);
+
+const { ends: _ends, ...placeCaseFields } = caseFields;
+
+/** Input of the engine's `place` command; both ends get the same dampers. */
+export const placeInputSchema = z.strictObject({
+  ...placeCaseFields,
+  span: z.strictObject(spanFields),
+  limits: z.strictObject({
+    endurance: z.strictObject({ stressPa: finite().positive('must be above 0').max(1e9), source: z.string().max(400) }),
+    damperedStrain: z
+      .strictObject({
+        strainRatio: finite().positive('must be above 0').max(0.01),
+        convention: z.enum(['peak-to-peak', 'zero-to-peak']),
+        source: z.string().max(400),
+      })
+      .nullable(),
+  }),
+  catalogue: z
+    .array(z.strictObject({ name: z.string().min(1).max(100), model: damperModelSchema }))
+    .min(1)
+    .max(20),
+  damperLimitCount: z.number().int().min(0).max(3).describe('Most dampers per end'),
+  distance: z.strictObject({
+    lowerM: finite().min(0.05),
+    upperM: finite().max(30),
+    stepM: finite().min(0.001).max(1),
+  }),
+  toleranceM: finite()
+    .min(0)
+    .max(0.5)
+    .optional()
+    .describe('How far a damper may be fitted from its plan; 0 when left out'),
+  tensionsN: z
+    .array(tension)
+    .min(1)
+    .max(6)
+    .optional()
+    .describe('Over the seasons; the tension of the span when left out'),
+});

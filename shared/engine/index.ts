@@ -14,6 +14,8 @@ export { damperCommand } from './commands/damper-command.ts';
 export { endCommand } from './commands/end-command.ts';
 export { lifeCommand } from './commands/life-command.ts';
 export type { LifeInput, LifeOutput } from './commands/life-command.ts';
+export { placeCommand } from './commands/place-command.ts';
+export type { PlaceInput } from './commands/place-command.ts';
 export { spanCommand } from './commands/span-command.ts';
 export { wavesCommand } from './commands/waves-command.ts';
 export type { DamperHalf, DamperModel, ImpedanceRow } from './dampers/damper-model.ts';
@@ -33,6 +35,15 @@ export type { MethodEntry } from './methods/method-registry.ts';
 export type { UserCurves } from './methods/user-curves.ts';
 export { EngineInputError } from './numerics/engine-input-error.ts';
 export { damperMotionShare, damperTestBand, ruleDistance } from './placement/rule-distance.ts';
+export type {
+  CatalogueDamper,
+  PlacementChoice,
+  PlacementProgress,
+  PlacementResult,
+  PlacementTask,
+  PlannedDamper,
+} from './placement/placement-types.ts';
+export { searchPlacements } from './placement/search-placements.ts';
 export { safeTension, tensionAtParameter, tensionParameter } from './screening/tension-parameter.ts';
 export {
   attenuationLength,

@@ -119,6 +119,10 @@ const fixed: readonly MethodEntry[] = [
     'Miner’s sum over the cycles a recorder counted, carried on to a year; safe border lines of CIGRE from memory',
     'the time of recording stands for the year',
   ]),
+  entry(['fixed', 'placement-search', false], 'own model', [
+    'Search over dampers and distances, the same at both ends: a look over the grid, then steps of falling size',
+    'a search, no proof that nothing better exists',
+  ]),
   entry(['fixed', 'damper-halves', false], 'closed form', [
     'Damper as clamp mass and halves with two freedoms each, hysteretic loss in the messenger',
     'the amplitude at which stiffness and loss were measured',

@@ -67,9 +67,34 @@ function balanceInput(setup: SpanSetup): BalanceInput {
     angularFrequencyRadPerS: 0,
     windScaleWPerM: 0,
     dampingScaleWPerM: 0,
-    leftReflectionRatio: 0,
-    rightReflectionRatio: 0,
+    leftReflectionRatio: 1,
+    rightReflectionRatio: 1,
   };
+}
+
+/** Wind power per metre at 1 Hz and fnc = 1. */
+function windFactorOf({ wire, airDensityKgPerM3, methods }: SpanSetup): number {
+  return (airDensityKgPerM3 / referenceDensityKgPerM3) * wire.diameterM ** 4 * methods.turbulenceFactorRatio;
+}
+
+/** What the balance needs at one frequency of a wave table; the reflections are left at 1. */
+export function balanceInputAt(setup: SpanSetup, waves: WaveTable, index: number): BalanceInput {
+  const input = balanceInput(setup);
+  setFrequency(input, { setup, waves, index, windFactor: windFactorOf(setup) });
+  return input;
+}
+
+function setFrequency(
+  input: BalanceInput,
+  at: { readonly setup: SpanSetup; readonly waves: WaveTable; readonly index: number; readonly windFactor: number },
+): void {
+  const { waves, index } = at;
+  const { factor, frequencyExponentNumber } = at.setup.methods.selfDamping;
+  const f = waves.frequenciesHz[index] as number;
+  input.impedanceNsPerM = waves.impedancesNsPerM[index] as number;
+  input.angularFrequencyRadPerS = waves.angularFrequenciesRadPerS[index] as number;
+  input.windScaleWPerM = at.windFactor * f * f * f;
+  input.dampingScaleWPerM = factor * Math.exp(frequencyExponentNumber * Math.log(f));
 }
 
 /**
@@ -100,20 +125,15 @@ export function sweepSpan(
   };
   const solver = balanceSolver(methods.windCurve);
   const input = balanceInput(setup);
-  const densityRatio = setup.airDensityKgPerM3 / referenceDensityKgPerM3;
-  const windFactor = densityRatio * wire.diameterM ** 4 * methods.turbulenceFactorRatio;
-  const { factor, frequencyExponentNumber } = methods.selfDamping;
+  const at = { setup, waves, index: 0, windFactor: windFactorOf(setup) };
   for (let index = 0; index < count; index += 1) {
-    const f = waves.frequenciesHz[index] as number;
     if (responses[0].hasData[index] === 0 || responses[1].hasData[index] === 0) {
       sweep.outcomeCodes[index] = outcomeCodes['no-damper-data'];
       visit?.(index, solver, 'no-damper-data');
       continue;
     }
-    input.impedanceNsPerM = waves.impedancesNsPerM[index] as number;
-    input.angularFrequencyRadPerS = waves.angularFrequenciesRadPerS[index] as number;
-    input.windScaleWPerM = windFactor * f * f * f;
-    input.dampingScaleWPerM = factor * Math.exp(frequencyExponentNumber * Math.log(f));
+    at.index = index;
+    setFrequency(input, at);
     input.leftReflectionRatio = responses[0].reflectionRatio[index] as number;
     input.rightReflectionRatio = responses[1].reflectionRatio[index] as number;
     const { outcome, leftAmplitudeRatio, rightAmplitudeRatio } = solveSpanBalance(solver, input);

@@ -44,6 +44,23 @@ export const engineEndSchema = z.strictObject({
       }),
     )
     .max(12),
+  armourRods: z
+    .strictObject({
+      lengthM: finite()
+        .positive('must be above 0')
+        .describe('From the last point of contact to the end of the rods, m'),
+      massKgPerM: finite().positive('must be above 0').max(100).describe('Wire and rods together, kg/m'),
+      bendingStiffnessNm2: finite().min(1e-4).max(1e7).describe('Wire and rods together, N·m²'),
+    })
+    .optional(),
+  support: z
+    .strictObject({
+      massKg: finite().min(0).max(5000),
+      stiffnessNPerM: finite().min(0).max(1e9),
+      dampingNsPerM: finite().min(0).max(1e6),
+    })
+    .optional()
+    .describe('A clamp that moves, as one span feels it; left out, it stands still'),
 });
 
 const spanFields = {

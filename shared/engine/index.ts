@@ -20,7 +20,7 @@ export { spanCommand } from './commands/span-command.ts';
 export { wavesCommand } from './commands/waves-command.ts';
 export type { DamperHalf, DamperModel, ImpedanceRow } from './dampers/damper-model.ts';
 export { damperNaturalFrequencies } from './dampers/damper-natural-frequencies.ts';
-export type { PlacedDamper, SpanEnd } from './ends/span-end.ts';
+export type { ArmourRods, ClampSupport, PlacedDamper, SpanEnd } from './ends/span-end.ts';
 export { absorbedShare, inverseStandingWaveRatio, nodePower, standingWaveRatio } from './ends/standing-wave-ratio.ts';
 export { stringEndReflection } from './ends/string-end-reflection.ts';
 export { fatigueCrossing, fatigueCycles, fatigueStress, safeBorderLines } from './life/fatigue-curve.ts';

@@ -23,7 +23,7 @@ export function sweepAt(setup: SpanSetup, frequenciesHz: Float64Array, visit?: S
 /** Everything that the response of an end depends on. */
 function endKey(end: PreparedEnd, wireKey: string): string {
   const order = end.inputIndexes.map((input, place) => [input, end.distancesM[place], end.models[place]]);
-  return `${wireKey}|${end.clampReflectionRatio}|${JSON.stringify(order)}`;
+  return `${wireKey}|${end.clampReflectionRatio}|${JSON.stringify([order, end.armourRods, end.support])}`;
 }
 
 function cachedResponses(setup: SpanSetup, waves: WaveTable, reuse: EndResponseCache): EndResponses {
@@ -31,12 +31,11 @@ function cachedResponses(setup: SpanSetup, waves: WaveTable, reuse: EndResponseC
   const grid = [waves.frequenciesHz[0], waves.frequenciesHz.at(-1), waves.frequenciesHz.length];
   const wireKey = [massKgPerM, bendingStiffnessMinNm2, setup.tensionN, ...grid].join();
   const impedances: ImpedanceStore = new Map();
-  let wire: ClampedWire | null = null;
-  const clamped = () => (wire ??= clampedWire(waves));
+  let kept: ClampedWire | null = null;
+  const clamped = () => (kept ??= clampedWire(waves));
+  const wire = { massKgPerM, tensionN: setup.tensionN, bendingStiffnessNm2: bendingStiffnessMinNm2 };
   const respond = (end: PreparedEnd) =>
-    reuse.obtain(endKey(end, wireKey), () =>
-      respondEnd(clamped(), end, { bendingStiffnessNm2: bendingStiffnessMinNm2, impedances }),
-    );
+    reuse.obtain(endKey(end, wireKey), () => respondEnd(clamped(), end, { wire, impedances }));
   return [respond(setup.ends[0]), respond(setup.ends[1])];
 }
 

@@ -77,14 +77,13 @@ export function endCommand(input: EndInput): CommandHead & { rows: EndRow[] } {
   const end = prepareEnd(input.end, { path: 'end', lengthM: reachM });
   const wire = { massKgPerM, tensionN: input.tensionN, bendingStiffnessNm2: bendingStiffnessMinNm2 };
   const waves = waveTable(wire, checkedFrequencies(input.frequenciesHz));
-  const response = respondEnd(clampedWire(waves), end, {
-    bendingStiffnessNm2: bendingStiffnessMinNm2,
-    impedances: new Map(),
-  });
+  const response = respondEnd(clampedWire(waves), end, { wire, impedances: new Map() });
   const kinds = new Set(end.models.map((model) => model.kind));
   const names = [
     'waves-tensioned-beam',
     'end-rigid-clamp',
+    ...(end.armourRods === null ? [] : ['end-armour-rods']),
+    ...(end.support === null ? [] : ['end-moving-clamp']),
     ...(kinds.has('halves') ? ['damper-halves'] : []),
     ...(kinds.has('table') ? ['damper-table'] : []),
   ];

@@ -2,7 +2,7 @@ import { assertDamperModel } from '../dampers/assert-damper-model.ts';
 import type { DamperModel } from '../dampers/damper-model.ts';
 import { assertNumber } from '../numerics/assert-number.ts';
 import { EngineInputError } from '../numerics/engine-input-error.ts';
-import type { SpanEnd } from './span-end.ts';
+import type { ArmourRods, ClampSupport, SpanEnd } from './span-end.ts';
 
 /** An end with its dampers at rising distances, and where each stood in the input. */
 export interface PreparedEnd {
@@ -11,11 +11,40 @@ export interface PreparedEnd {
   readonly models: readonly DamperModel[];
   /** Position in the input of each damper in rising order. */
   readonly inputIndexes: readonly number[];
+  readonly armourRods: ArmourRods | null;
+  readonly support: ClampSupport | null;
 }
 
 /** Two dampers nearer than this are at one place. */
 const sameDistanceM = 1e-6;
 const damperLimitCount = 12;
+
+/** @source common practice: bounds that refuse slips of the pen */
+const rodLimits = {
+  massKgPerM: { above: 0, atMost: 100 },
+  bendingStiffnessNm2: { atLeast: 1e-4, atMost: 1e7 },
+} as const;
+const supportLimits = {
+  massKg: { atLeast: 0, atMost: 5000 },
+  stiffnessNPerM: { atLeast: 0, atMost: 1e9 },
+  dampingNsPerM: { atLeast: 0, atMost: 1e6 },
+} as const;
+
+function assertFittings(
+  { armourRods, support }: SpanEnd,
+  reach: { readonly path: string; readonly lengthM: number },
+): void {
+  if (armourRods !== undefined) {
+    const path = `${reach.path}.armourRods`;
+    assertNumber(`${path}.lengthM`, armourRods.lengthM, { above: 0, below: reach.lengthM });
+    assertNumber(`${path}.massKgPerM`, armourRods.massKgPerM, rodLimits.massKgPerM);
+    assertNumber(`${path}.bendingStiffnessNm2`, armourRods.bendingStiffnessNm2, rodLimits.bendingStiffnessNm2);
+  }
+  if (support === undefined) return;
+  for (const [key, limits] of Object.entries(supportLimits)) {
+    assertNumber(`${reach.path}.support.${key}`, support[key as keyof ClampSupport], limits); // keys of the table are keys of a support
+  }
+}
 
 /**
  * Checks an end and puts its dampers into rising order.
@@ -45,6 +74,7 @@ export function prepareEnd(end: SpanEnd, reach: { readonly path: string; readonl
     }
     assertDamperModel(damper.model, `${here}.model`);
   });
+  assertFittings(end, reach);
   const order = end.dampers.map((damper, index) => ({ damper, index }));
   order.sort((a, b) => a.damper.distanceM - b.damper.distanceM);
   order.forEach(({ damper, index }, place) => {
@@ -60,6 +90,8 @@ export function prepareEnd(end: SpanEnd, reach: { readonly path: string; readonl
     distancesM: Float64Array.from(order, ({ damper }) => damper.distanceM),
     models: order.map(({ damper }) => damper.model),
     inputIndexes: order.map(({ index }) => index),
+    armourRods: end.armourRods ?? null,
+    support: end.support ?? null,
   };
 }
 

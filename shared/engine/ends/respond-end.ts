@@ -4,16 +4,34 @@ import { clampResponse, type ImpedanceSeries } from './clamp-response.ts';
 import type { ClampedWire } from './clamped-wire.ts';
 import type { EndResponse } from './end-response.ts';
 import type { PreparedEnd } from './prepare-end.ts';
+import { segmentResponse } from './segment-response.ts';
+import type { ArmourRods } from './span-end.ts';
+import type { WaveWire } from '../waves/wave-table.ts';
 
 /** Impedances of the damper models met in one sweep, so that one model is evaluated once. */
 export type ImpedanceStore = Map<DamperModel, ImpedanceSeries>;
+
+/** The parts of an end that only the general solver knows. */
+function changes({ armourRods, support }: PreparedEnd, { waves }: ClampedWire, wire: WaveWire) {
+  const covered =
+    armourRods === null ? null : { lengthM: armourRods.lengthM, wire: { ...wire, ...rodWire(armourRods) } };
+  if (support === null) return { wire, covered, support: null };
+  const { massKg, stiffnessNPerM, dampingNsPerM } = support;
+  const impedance: ImpedanceSeries = {
+    re: waves.angularFrequenciesRadPerS.map(() => dampingNsPerM),
+    im: waves.angularFrequenciesRadPerS.map((w) => w * massKg - stiffnessNPerM / w),
+  };
+  return { wire, covered, support: impedance };
+}
+
+const rodWire = ({ massKgPerM, bendingStiffnessNm2 }: ArmourRods) => ({ massKgPerM, bendingStiffnessNm2 });
 
 /**
  * Response of a checked end at each frequency of a clamped wire.
  *
  * @param wire clamped wire at the frequencies, [n]
  * @param end   checked end
- * @param from.bendingStiffnessNm2 EI, scalar [N·m²], > 0
+ * @param from.wire m, T and EI > 0 of the span's wire
  * @param from.impedances models evaluated before for the same frequencies; added to
  * @returns reflection, curvatures and damper motions, dampers in the order of the input
  * @source closed form, see clampResponse
@@ -23,7 +41,7 @@ export type ImpedanceStore = Map<DamperModel, ImpedanceSeries>;
 export function respondEnd(
   wire: ClampedWire,
   end: PreparedEnd,
-  from: { readonly bendingStiffnessNm2: number; readonly impedances: ImpedanceStore },
+  from: { readonly wire: WaveWire; readonly impedances: ImpedanceStore },
 ): EndResponse {
   const impedances = end.models.map((model) => {
     const known = from.impedances.get(model);
@@ -32,12 +50,19 @@ export function respondEnd(
     from.impedances.set(model, series);
     return series;
   });
-  const response = clampResponse(wire, {
-    clampReflectionRatio: end.clampReflectionRatio,
-    bendingStiffnessNm2: from.bendingStiffnessNm2,
-    distancesM: end.distancesM,
-    impedances,
-  });
+  const { clampReflectionRatio, distancesM } = end;
+  const isPlain = end.armourRods === null && end.support === null;
+  const response = isPlain
+    ? clampResponse(wire, {
+        clampReflectionRatio,
+        bendingStiffnessNm2: from.wire.bendingStiffnessNm2,
+        distancesM,
+        impedances,
+      })
+    : segmentResponse(
+        { ...changes(end, wire, from.wire), clampReflectionRatio, distancesM, impedances },
+        wire.waves.frequenciesHz,
+      );
   if (end.inputIndexes.every((input, place) => input === place)) return response;
   const inInputOrder = (series: readonly Float64Array[]) =>
     end.inputIndexes.map((_, input) => series[end.inputIndexes.indexOf(input)] ?? new Float64Array(0));

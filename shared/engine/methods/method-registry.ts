@@ -103,6 +103,14 @@ const fixed: readonly MethodEntry[] = [
     'Reflection at a rigid clamp with point dampers, superposition on the clamped wire',
     'dampers take force, no moment; strain at a damper clamp is indicative',
   ]),
+  entry(['fixed', 'end-armour-rods', false], 'closed form', [
+    'Wire under armour rods as a piece of its own stiffness and mass, solved piece by piece',
+    'rods that hold to the wire along their length; strain from the curvature of the covered wire',
+  ]),
+  entry(['fixed', 'end-moving-clamp', false], 'closed form', [
+    'Clamp that moves as mass, spring and damper and does not rotate',
+    'spans on both sides swing alike, each taking half of the clamp',
+  ]),
   entry(['fixed', 'span-travelling-wave-balance', false], 'closed form', [
     'Energy flux of travelling waves along the span, fed by wind power less self-damping, taken by both ends',
     'at least about ten loops in the span; losses small within a loop',

@@ -17,6 +17,8 @@ export function spanMethodNotes(setup: SpanSetup): MethodNote[] {
   const names = [
     'waves-tensioned-beam',
     'end-rigid-clamp',
+    ...(setup.ends.some((end) => end.armourRods !== null) ? ['end-armour-rods'] : []),
+    ...(setup.ends.some((end) => end.support !== null) ? ['end-moving-clamp'] : []),
     ...(kinds.has('halves') ? ['damper-halves'] : []),
     ...(kinds.has('table') ? ['damper-table'] : []),
     'span-travelling-wave-balance',

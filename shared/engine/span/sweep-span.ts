@@ -49,11 +49,9 @@ export function respondEnds(
   frequenciesHz: Float64Array,
 ): { waves: WaveTable; responses: EndResponses } {
   const bendingStiffnessNm2 = setup.wire.bendingStiffnessMinNm2;
-  const waves = waveTable(
-    { massKgPerM: setup.wire.massKgPerM, tensionN: setup.tensionN, bendingStiffnessNm2 },
-    frequenciesHz,
-  );
-  const from = { bendingStiffnessNm2, impedances: new Map() satisfies ImpedanceStore };
+  const wire = { massKgPerM: setup.wire.massKgPerM, tensionN: setup.tensionN, bendingStiffnessNm2 };
+  const waves = waveTable(wire, frequenciesHz);
+  const from = { wire, impedances: new Map() satisfies ImpedanceStore };
   const clamped = clampedWire(waves);
   return { waves, responses: [respondEnd(clamped, setup.ends[0], from), respondEnd(clamped, setup.ends[1], from)] };
 }

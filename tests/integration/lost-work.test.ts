@@ -36,7 +36,9 @@ afterAll(async () => {
 /** A worker as a process of its own, so that it can be ended without warning. */
 function startWorkerProcess(): ChildProcess {
   const { config } = stack;
-  const given = Object.fromEntries(Object.entries(config).map(([key, value]) => [key, String(value)]));
+  const given = Object.fromEntries(
+    Object.entries(config).flatMap(([key, value]) => (value === undefined ? [] : [[key, String(value)]])),
+  );
   const worker = spawn(process.execPath, ['--import', 'tsx', 'worker/main.ts'], {
     cwd: projectDirectory,
     env: { ...process.env, ...given, REDIS_URL: `${stack.redisUrl}/${redisNumber}`, STILLSPAN_LOG_LEVEL: 'error' },

@@ -1,5 +1,5 @@
 import { z } from 'zod';
-import { damperModelSchema } from './dampers.ts';
+import { damperModelSchema, impedanceRowSchema } from './dampers.ts';
 
 /** Name and version of the engine's documents. */
 export const engineSchemaName = 'stillspan.engine/1';
@@ -34,13 +34,30 @@ export const engineFrequenciesSchema = z
   .max(20_000)
   .describe('Frequencies in any order, Hz');
 
+/** A damper as the engine takes it: the service's models, and tables at several clamp velocities. */
+export const engineDamperModelSchema = z.discriminatedUnion('kind', [
+  ...damperModelSchema.options,
+  z.strictObject({
+    kind: z.literal('velocity-tables'),
+    tables: z
+      .array(
+        z.strictObject({
+          clampVelocityMPerS: finite().positive('must be above 0').max(5),
+          rows: z.array(impedanceRowSchema).min(2).max(2000),
+        }),
+      )
+      .min(2)
+      .max(12),
+  }),
+]);
+
 export const engineEndSchema = z.strictObject({
   clampReflectionRatio: finite().min(0).max(1).optional().describe('Factor on the reflection for loss in the clamp'),
   dampers: z
     .array(
       z.strictObject({
         distanceM: finite().positive('must be above 0').describe('From the last point of contact at the clamp, m'),
-        model: damperModelSchema,
+        model: engineDamperModelSchema,
       }),
     )
     .max(12),
@@ -138,7 +155,7 @@ export const endInputSchema = z.strictObject({
 /** Input of the engine's `damper` command. */
 export const damperInputSchema = z.strictObject({
   schema: schemaName,
-  model: damperModelSchema,
+  model: engineDamperModelSchema,
   frequenciesHz: engineFrequenciesSchema,
 });
 
@@ -222,7 +239,7 @@ export const placeInputSchema = z.strictObject({
       .nullable(),
   }),
   catalogue: z
-    .array(z.strictObject({ name: z.string().min(1).max(100), model: damperModelSchema }))
+    .array(z.strictObject({ name: z.string().min(1).max(100), model: engineDamperModelSchema }))
     .min(1)
     .max(20),
   damperLimitCount: z.number().int().min(0).max(3).describe('Most dampers per end'),

@@ -2,7 +2,8 @@ import { clampedWire, type ClampedWire } from '../ends/clamped-wire.ts';
 import type { PreparedEnd } from '../ends/prepare-end.ts';
 import { respondEnd, type ImpedanceStore } from '../ends/respond-end.ts';
 import { spanSetup, type SpanSetup } from '../span/span-setup.ts';
-import { respondEnds, sweepSpan, type EndResponses, type SpanSweep, type SweepVisitor } from '../span/sweep-span.ts';
+import { hasVelocityTables, solveSweep } from '../span/solve-sweep.ts';
+import { sweepSpan, type EndResponses, type SpanSweep, type SweepVisitor } from '../span/sweep-span.ts';
 import { waveTable, type WaveTable } from '../waves/wave-table.ts';
 import { windGridFrequencies } from '../wind/wind-grid.ts';
 import { assertBasis } from './assert-basis.ts';
@@ -17,7 +18,7 @@ export function caseSetup(input: SpanWireCase, basis: VibrationBasis): SpanSetup
 
 /** Balance of a span at given frequencies. */
 export function sweepAt(setup: SpanSetup, frequenciesHz: Float64Array, visit?: SweepVisitor): SpanSweep {
-  return sweepSpan(setup, respondEnds(setup, frequenciesHz), visit);
+  return solveSweep(setup, frequenciesHz, visit);
 }
 
 /** Everything that the response of an end depends on. */
@@ -43,7 +44,8 @@ function cachedResponses(setup: SpanSetup, waves: WaveTable, reuse: EndResponseC
 export function windSweep(setup: SpanSetup, basis: VibrationBasis, reuse?: EndResponseCache): SpanSweep {
   const { diameterM, massKgPerM, bendingStiffnessMinNm2 } = setup.wire;
   const frequenciesHz = windGridFrequencies(basis, { diameterM, strouhalNumber: setup.methods.strouhalNumber });
-  if (reuse === undefined) return sweepAt(setup, frequenciesHz);
+  // Where impedance depends on the motion, an end's response belongs to its span alone.
+  if (reuse === undefined || hasVelocityTables(setup)) return sweepAt(setup, frequenciesHz);
   const wire = { massKgPerM, tensionN: setup.tensionN, bendingStiffnessNm2: bendingStiffnessMinNm2 };
   const waves = waveTable(wire, frequenciesHz);
   return sweepSpan(setup, { waves, responses: cachedResponses(setup, waves, reuse) });

@@ -26,7 +26,7 @@ export interface DamperRow {
  * @returns rows [n] in the order of the frequencies; natural frequencies per half, null for a table
  * @throws EngineInputError naming the field
  * @source closed form for halves, see halfDamperImpedance; the measurement for a table
- * @validity that of the model
+ * @validity that of the model; velocity tables at the middle of their velocities
  * @accuracy that of the model
  */
 export function damperCommand(
@@ -42,7 +42,7 @@ export function damperCommand(
     return { frequencyHz, impedance: Number.isNaN(re) ? null : { re, im: series.im[index] as number } };
   });
   const isHalves = model.kind === 'halves';
-  const note = methodNote(methodEntry('fixed', isHalves ? 'damper-halves' : 'damper-table'));
+  const note = methodNote(methodEntry('fixed', `damper-${model.kind}`));
   return {
     ...commandHead([note]),
     naturalFrequenciesHz: isHalves ? model.halves.map(damperNaturalFrequencies) : null,

@@ -66,7 +66,7 @@ function endRow(frequencyHz: number, response: EndResponse, index: number): EndR
  * @returns rows [n] in the order of the frequencies, dampers in the order of the input
  * @throws EngineInputError naming the field
  * @source closed form, see clampResponse
- * @validity see clampResponse; strain at a damper clamp is indicative
+ * @validity see clampResponse; velocity tables at the middle of their velocities; strain at a damper clamp is indicative
  * @accuracy rounding
  */
 export function endCommand(input: EndInput): CommandHead & { rows: EndRow[] } {
@@ -86,6 +86,7 @@ export function endCommand(input: EndInput): CommandHead & { rows: EndRow[] } {
     ...(end.support === null ? [] : ['end-moving-clamp']),
     ...(kinds.has('halves') ? ['damper-halves'] : []),
     ...(kinds.has('table') ? ['damper-table'] : []),
+    ...(kinds.has('velocity-tables') ? ['damper-velocity-tables'] : []),
   ];
   return {
     ...commandHead(names.map((name) => methodNote(methodEntry('fixed', name)))),

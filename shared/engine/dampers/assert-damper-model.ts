@@ -2,6 +2,7 @@ import { assertNumber } from '../numerics/assert-number.ts';
 import { EngineInputError } from '../numerics/engine-input-error.ts';
 import type { DamperHalf, DamperModel } from './damper-model.ts';
 import { impedanceTable } from './impedance-table.ts';
+import { assertVelocityTables } from './velocity-tables.ts';
 
 /** @source common practice: bounds that refuse slips of the pen, not unusual dampers */
 const halfLimits = {
@@ -36,6 +37,10 @@ export function assertDamperModel(model: DamperModel, path: string): void {
       throw new EngineInputError(`${path}.halves`, 'must be one or two halves');
     }
     model.halves.forEach((half, index) => assertHalf(half, `${path}.halves[${index}]`));
+    return;
+  }
+  if (model.kind === 'velocity-tables') {
+    assertVelocityTables(model, path);
     return;
   }
   if (model.clampVelocityMPerS !== undefined) {

@@ -30,5 +30,11 @@ export interface TableDamperModel {
   readonly clampVelocityMPerS?: number | undefined;
 }
 
+/** Damper described by impedance tables measured at several clamp velocities, rising. */
+export interface VelocityTablesDamperModel {
+  readonly kind: 'velocity-tables';
+  readonly tables: readonly { readonly clampVelocityMPerS: number; readonly rows: readonly ImpedanceRow[] }[];
+}
+
 /** What the engine knows of a damper. */
-export type DamperModel = HalvesDamperModel | TableDamperModel;
+export type DamperModel = HalvesDamperModel | TableDamperModel | VelocityTablesDamperModel;

@@ -11,6 +11,14 @@ import type { WaveWire } from '../waves/wave-table.ts';
 /** Impedances of the damper models met in one sweep, so that one model is evaluated once. */
 export type ImpedanceStore = Map<DamperModel, ImpedanceSeries>;
 
+/** What an end's response is computed from besides the end. */
+export interface RespondFrom {
+  readonly wire: WaveWire;
+  readonly impedances: ImpedanceStore;
+  /** Clamp velocities [n] of the end's dampers in the order of the input, for models that depend on them. */
+  readonly velocities?: readonly Float64Array[] | undefined;
+}
+
 /** The parts of an end that only the general solver knows. */
 function changes({ armourRods, support }: PreparedEnd, { waves }: ClampedWire, wire: WaveWire) {
   const covered =
@@ -33,17 +41,17 @@ const rodWire = ({ massKgPerM, bendingStiffnessNm2 }: ArmourRods) => ({ massKgPe
  * @param end   checked end
  * @param from.wire m, T and EI > 0 of the span's wire
  * @param from.impedances models evaluated before for the same frequencies; added to
+ * @param from.velocities clamp velocities, for models that depend on them
  * @returns reflection, curvatures and damper motions, dampers in the order of the input
  * @source closed form, see clampResponse
  * @validity see clampResponse
  * @accuracy see clampResponse
  */
-export function respondEnd(
-  wire: ClampedWire,
-  end: PreparedEnd,
-  from: { readonly wire: WaveWire; readonly impedances: ImpedanceStore },
-): EndResponse {
-  const impedances = end.models.map((model) => {
+export function respondEnd(wire: ClampedWire, end: PreparedEnd, from: RespondFrom): EndResponse {
+  const impedances = end.models.map((model, place) => {
+    if (model.kind === 'velocity-tables') {
+      return damperImpedance(model, wire.waves, from.velocities?.[end.inputIndexes[place] ?? place]);
+    }
     const known = from.impedances.get(model);
     if (known !== undefined) return known;
     const series = damperImpedance(model, wire.waves);

@@ -139,6 +139,10 @@ const fixed: readonly MethodEntry[] = [
     'Measured impedance, straight lines between the rows against ln f, never extrapolated',
     'inside the table, at its clamp velocity',
   ]),
+  entry(['fixed', 'damper-velocity-tables', false], 'common practice', [
+    'Measured impedance at several clamp velocities, straight lines against ln v, iterated until velocity and impedance agree',
+    'inside the tables; beyond their velocities the nearest table is held',
+  ]),
   entry(['fixed', 'wind-climate-weibull', false], 'common practice', [
     'Hours by direction sector and Weibull wind speed; the component normal to the span excites it',
     'at least eight sectors',

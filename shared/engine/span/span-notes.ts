@@ -21,6 +21,7 @@ export function spanMethodNotes(setup: SpanSetup): MethodNote[] {
     ...(setup.ends.some((end) => end.support !== null) ? ['end-moving-clamp'] : []),
     ...(kinds.has('halves') ? ['damper-halves'] : []),
     ...(kinds.has('table') ? ['damper-table'] : []),
+    ...(kinds.has('velocity-tables') ? ['damper-velocity-tables'] : []),
     'span-travelling-wave-balance',
     'strain-clamp-curvature',
   ];
@@ -77,6 +78,10 @@ export function spanWarnings(setup: SpanSetup, sweep: SpanSweep): EngineWarning[
     (band) =>
       `An end reflects less than half the amplitude in the range ${band}; wind power and self-damping were measured on standing waves.`,
   );
+  if (sweep.isSettled === false) {
+    const text = 'The clamp velocity of a damper did not settle on its impedance tables at every frequency.';
+    warnings.push({ code: 'velocity-not-settled', text });
+  }
   const speed = Math.sqrt(setup.tensionN / setup.wire.massKgPerM);
   add(
     'few-loops',

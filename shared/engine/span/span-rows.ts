@@ -3,7 +3,8 @@ import type { BalanceSolver } from './span-balance.ts';
 import { amplitudeRatioAt, spanEnergy, spanPlace, type SpanEnergy } from './span-place.ts';
 import type { EndPair, SpanOutcome, SpanRow } from './span-row.ts';
 import type { SpanSetup } from './span-setup.ts';
-import { outcomeOf, respondEnds, sweepSpan, type EndResponses, type SpanSweep } from './sweep-span.ts';
+import { solveSweep } from './solve-sweep.ts';
+import { outcomeOf, type EndResponses, type SpanSweep } from './sweep-span.ts';
 
 type RowPowers = Pick<
   SpanRow,
@@ -71,12 +72,11 @@ function strains(
  * @accuracy see solveSpanBalance and clampResponse
  */
 export function spanRows(setup: SpanSetup, frequenciesHz: Float64Array): { rows: SpanRow[]; sweep: SpanSweep } {
-  const from = respondEnds(setup, frequenciesHz);
   const powers: RowPowers[] = [];
-  const sweep = sweepSpan(setup, from, (index, solver, outcome) => {
+  const sweep = solveSweep(setup, frequenciesHz, (index, solver, outcome) => {
     powers[index] = powersOf(setup, solver, outcome);
   });
-  const { responses } = from;
+  const { responses } = sweep;
   const rows = powers.map((power, index): SpanRow => {
     const outcome = outcomeOf(sweep.outcomeCodes[index] as number);
     const reflection = (side: 0 | 1) =>

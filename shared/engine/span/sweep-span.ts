@@ -29,6 +29,8 @@ export interface SpanSweep {
   readonly outcomeCodes: Uint8Array;
   readonly endAmplitudesM: EndPair<Float64Array>;
   readonly responses: EndResponses;
+  /** False if a damper's clamp velocity did not settle on its impedance tables. */
+  readonly isSettled?: boolean;
 }
 
 /** Called after each solved frequency, with the solver still in that state. */
@@ -39,6 +41,7 @@ export type SweepVisitor = (index: number, solver: BalanceSolver, outcome: SpanO
  *
  * @param setup         checked span
  * @param frequenciesHz f, [n] [Hz], > 0
+ * @param velocities    clamp velocities of the dampers of both ends, for models that depend on them
  * @returns wave table and both responses
  * @source closed form, see clampResponse
  * @validity see clampResponse
@@ -47,13 +50,15 @@ export type SweepVisitor = (index: number, solver: BalanceSolver, outcome: SpanO
 export function respondEnds(
   setup: SpanSetup,
   frequenciesHz: Float64Array,
+  velocities?: EndPair<Float64Array[]>,
 ): { waves: WaveTable; responses: EndResponses } {
   const bendingStiffnessNm2 = setup.wire.bendingStiffnessMinNm2;
   const wire = { massKgPerM: setup.wire.massKgPerM, tensionN: setup.tensionN, bendingStiffnessNm2 };
   const waves = waveTable(wire, frequenciesHz);
   const from = { wire, impedances: new Map() satisfies ImpedanceStore };
   const clamped = clampedWire(waves);
-  return { waves, responses: [respondEnd(clamped, setup.ends[0], from), respondEnd(clamped, setup.ends[1], from)] };
+  const respond = (end: 0 | 1) => respondEnd(clamped, setup.ends[end], { ...from, velocities: velocities?.[end] });
+  return { waves, responses: [respond(0), respond(1)] };
 }
 
 function balanceInput(setup: SpanSetup): BalanceInput {

@@ -12,7 +12,7 @@ export async function up(knex: Knex): Promise<void> {
     as $$ select nullif(current_setting('stillspan.utility_id', true), '')::uuid $$`);
   await knex.raw(`create type person_role as enum ('engineer', 'crew', 'manager', 'safety-officer', 'admin')`);
   await knex.raw(`create type grade as enum ('calm', 'notice', 'act', 'urgent')`);
-  await knex.raw(`create type outcome as enum ('steady', 'quiet', 'amplitude-limit', 'no-damper-data')`);
+  await knex.raw(`create type outcome as enum ('steady', 'quiet', 'amplitude-limit', 'no-damper-data', 'refused')`);
   await knex.raw(`create type span_side as enum ('from', 'to')`);
 }
 

@@ -4,7 +4,8 @@ import { idSchema, instantSchema, pageOf, pageQuery } from './paging.ts';
 import { reasonSchema } from './reasons.ts';
 import { route } from './route.ts';
 
-export const outcomes = ['steady', 'quiet', 'amplitude-limit', 'no-damper-data'] as const;
+/** `refused`: the engine did not take the input; the reason says why. */
+export const outcomes = ['steady', 'quiet', 'amplitude-limit', 'no-damper-data', 'refused'] as const;
 export const outcomeSchema = z.enum(outcomes);
 
 export const methodNoteSchema = z.object({ name: z.string(), standing: z.string(), source: z.string() });

@@ -35,6 +35,7 @@ const reasons: Reason[] = [
   { code: 'damper-off-plan', structureName: '14', distanceM: 1.4, plannedDistanceM: 1.05, offsetM: 0.35 },
   { code: 'amplitude-limit', frequencyHz: 10, windSpeedMPerS: 1.5 },
   { code: 'no-damper-data', frequencyLowerHz: 5, frequencyUpperHz: 60 },
+  { code: 'refused-input', field: 'span.tensionN', problem: 'must not exceed the rated strength' },
   { code: 'quiet' },
   { code: 'assumed-input' },
 ];

@@ -31,6 +31,7 @@ const sentences: Sentences = {
     `The amplitude reaches half a diameter ${at(reason, show)}, the end of what the wind power curve covers; the true one may be larger.`,
   'no-damper-data': (reason, show) =>
     `The damper data cover ${show(reason.frequencyLowerHz, 'frequency')} to ${show(reason.frequencyUpperHz, 'frequency')} only; outside nothing could be computed.`,
+  'refused-input': ({ field, problem }) => `Not computed: ${field} ${problem}.`,
   quiet: () => 'Self-damping outweighs the wind over the whole band; the wire stays quiet.',
   'assumed-input': () => 'Rests on assumed spans, wires or tensions; check them before acting.',
 };

@@ -58,6 +58,7 @@ export const reasonSchema = z.discriminatedUnion('code', [
     frequencyLowerHz: z.number().describe('Lower end of the band that the damper tables cover'),
     frequencyUpperHz: z.number().describe('Upper end of the band that the damper tables cover'),
   }),
+  z.object({ code: z.literal('refused-input'), field: z.string(), problem: z.string() }),
   z.object({ code: z.literal('quiet') }),
   z.object({ code: z.literal('assumed-input') }),
 ]);

@@ -1,6 +1,6 @@
 import { randomUUID } from 'node:crypto';
 import { setImmediate as nextTurn } from 'node:timers/promises';
-import { assessSpanWire, createEndResponseCache, type MethodNote } from '#shared/engine/index.ts';
+import { assessSpanWire, createEndResponseCache, EngineInputError, type MethodNote } from '#shared/engine/index.ts';
 import { engineBasisOf, engineCaseOf } from '#server/data/engine-case.ts';
 import { frozenCase, type FrozenChunk } from '#server/data/frozen-input.ts';
 import type { NewFinding } from '#server/data/findings.repository.ts';
@@ -34,6 +34,37 @@ function findingOf(chunk: FrozenChunk, itemIndex: number, cache: ReturnType<type
   return { finding, methods };
 }
 
+/** Input that the engine does not take is a finding too: somebody has to look, and the others of the chunk go on. */
+function refusedFinding(chunk: FrozenChunk, itemIndex: number, error: EngineInputError): NewFinding {
+  const { item } = frozenCase(chunk, itemIndex);
+  return {
+    id: randomUUID(),
+    spanWireId: item.spanWireId,
+    itemIndex,
+    outcome: 'refused',
+    grade: 'notice',
+    utilisationRatio: null,
+    stressPa: null,
+    limitStressPa: null,
+    frequencyHz: null,
+    windSpeedMPerS: null,
+    amplitudeM: null,
+    lifeYears: null,
+    reasons: [{ code: 'refused-input', field: error.path, problem: error.problem }],
+    warnings: [],
+    result: {},
+  };
+}
+
+function computeOrRefuse(chunk: FrozenChunk, itemIndex: number, cache: ReturnType<typeof createEndResponseCache>) {
+  try {
+    return findingOf(chunk, itemIndex, cache);
+  } catch (error) {
+    if (!(error instanceof EngineInputError)) throw error;
+    return { finding: refusedFinding(chunk, itemIndex, error), methods: [] };
+  }
+}
+
 /** Computes the findings of a chunk; stops between two span wires when the signal says so and then returns null. */
 export async function assessChunk(
   chunk: FrozenChunk,
@@ -49,7 +80,7 @@ export async function assessChunk(
       turnAtMs = performance.now() + turnEveryMs;
     }
     if (signal.aborted) return null;
-    const computed = findingOf(chunk, itemIndex, cache);
+    const computed = computeOrRefuse(chunk, itemIndex, cache);
     findings.push(computed.finding);
     for (const note of computed.methods) methods.set(note.name, note);
   }

@@ -1,8 +1,8 @@
 import { countOpenChunks, endRun, lockRun } from '#server/data/assessment-run.repository.ts';
 import type { UtilityTransaction } from '#server/data/database.ts';
 import { makeCurrent } from '#server/data/findings.repository.ts';
-import { closeFlags, openFlagsAndAlerts, planDeliveries } from '#server/data/flags.repository.ts';
-import { askForJob } from '#server/data/outbox.ts';
+import { closeFlags, openFlagsAndAlerts } from '#server/data/flags.repository.ts';
+import { planDeliveries } from '../mail/plan-deliveries.ts';
 
 /**
  * Ends an assessment whose chunks are all done: findings become current, flags and alerts follow, messages are asked
@@ -21,12 +21,8 @@ export async function finishRun(
   if (run.frozenAt === null || (await countOpenChunks(tx, assessmentId)) > 0) return 'open';
   await makeCurrent(tx, assessmentId);
   await closeFlags(tx, assessmentId);
-  await openFlagsAndAlerts(tx, assessmentId);
-  const { utilityId } = tx.actor;
-  for (const deliveryId of await planDeliveries(tx, assessmentId, run.basisSpec.digestFromCount)) {
-    const payload = { payloadVersion: 1 as const, utilityId, deliveryId };
-    await askForJob(tx, { name: 'send-mail', payload, dedupeKey: `send-mail-${deliveryId}` });
-  }
+  const alertIds = await openFlagsAndAlerts(tx, assessmentId);
+  await planDeliveries(tx, assessmentId, { alertIds, digestFromCount: run.basisSpec.digestFromCount });
   await endRun(tx, { assessmentId, state: 'done', failureDetail: null });
   return 'done';
 }

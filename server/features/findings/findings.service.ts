@@ -24,18 +24,23 @@ function rowOf(row: SpanSeriesRow): FindingSeries['rows'][number] {
 }
 
 function seriesOf(finding: Finding, frozen: FrozenCase, frequencyHz: number | null): FindingSeries {
-  const input = engineCaseOf(frozen);
-  const basis = engineBasisOf(frozen);
-  const { rows } = spanWireSeries(input, basis);
   const limits = limitsOf(frozen);
-  const at = frequencyHz ?? finding.frequencyHz;
-  const profile =
-    at === null ? null : spanWireProfile(input, basis, { frequencyHz: at, pointCount: profilePointCount });
-  return {
+  const shared = {
     findingId: finding.id,
     limitStressPa: limits.enduranceStressPa,
     limitSource: limits.enduranceSource,
     damperedLimitStressPa: limits.damperedStressPa,
+    isReproduced: finding.engineVersion === ENGINE_VERSION,
+  };
+  if (finding.outcome === 'refused') return { ...shared, rows: [], profile: null };
+  const input = engineCaseOf(frozen);
+  const basis = engineBasisOf(frozen);
+  const { rows } = spanWireSeries(input, basis);
+  const at = frequencyHz ?? finding.frequencyHz;
+  const profile =
+    at === null ? null : spanWireProfile(input, basis, { frequencyHz: at, pointCount: profilePointCount });
+  return {
+    ...shared,
     rows: rows.map(rowOf),
     profile:
       profile === null || profile.outcome !== 'steady'
@@ -46,7 +51,6 @@ function seriesOf(finding: Finding, frozen: FrozenCase, frequencyHz: number | nu
             amplitudesM: [...profile.amplitudesM],
             fluxesW: [...profile.fluxesW],
           },
-    isReproduced: finding.engineVersion === ENGINE_VERSION,
   };
 }
 

@@ -17,7 +17,6 @@ export interface LineDrawing {
   readonly renderer: leaflet.Renderer;
   /** Grades to show; empty shows all. */
   readonly grades: readonly Grade[];
-  readonly isPicked: (id: string) => boolean;
   readonly onPick: (id: string) => void;
 }
 
@@ -35,8 +34,6 @@ interface DrawnLine {
 
 function addLine(group: leaflet.LayerGroup, line: DrawnLine, drawing: LineDrawing): void {
   const { renderer, palette } = drawing;
-  if (drawing.isPicked(line.id))
-    leaflet.polyline(line.points, { ...pickedStroke(palette), renderer, interactive: false }).addTo(group);
   const strokes = strokesOf(line, palette);
   strokes.forEach((stroke, index) => {
     // The lowest stroke takes the clicks; those above it only draw.
@@ -86,6 +83,20 @@ export function drawSpans(group: leaflet.LayerGroup, spans: Spans, drawing: Line
     addLine(group, { id, points, ...properties, tooltip }, drawing);
     for (const damper of properties.dampers) drawDamperTick(group, points, { ...damper, drawing });
   }
+}
+
+interface PickedDrawing {
+  readonly palette: MapPalette;
+  readonly renderer: leaflet.Renderer;
+  readonly isPicked: (id: string) => boolean;
+}
+
+/** Halos of picked lines: apart from the lines, so that a pick does not draw the network again. */
+export function drawPicked(group: leaflet.LayerGroup, lines: Sections | Spans, drawing: PickedDrawing): void {
+  group.clearLayers();
+  const style = { ...pickedStroke(drawing.palette), renderer: drawing.renderer, interactive: false };
+  for (const { id, geometry } of lines.features)
+    if (drawing.isPicked(id)) leaflet.polyline(path(geometry.coordinates), style).addTo(group);
 }
 
 const tickAtRatio = 0.06;

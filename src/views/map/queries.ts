@@ -11,6 +11,7 @@ export const mapKeys = {
   terrain: ['map', 'terrain'] as const,
   extent: ['map', 'extent'] as const,
   list: (search: string, grades: readonly Grade[]) => ['map', 'list', search, grades] as const,
+  spanItems: ['map', 'span-item'] as const,
   spanItem: (spanId: string) => ['map', 'span-item', spanId] as const,
   bases: ['map', 'bases'] as const,
 };
@@ -55,11 +56,7 @@ export function useSpanList(search: MaybeRefOrGetter<string>, grades: MaybeRefOr
     queryKey: computed(() => mapKeys.list(toValue(search), toValue(grades))),
     queryFn: ({ signal }) =>
       call('listSpans', {
-        query: {
-          limitCount: listCount,
-          ...(toValue(search).trim() === '' ? {} : { search: toValue(search).trim() }),
-          ...(toValue(grades).length === 0 ? {} : { grades: toValue(grades).join(',') }),
-        },
+        query: { limitCount: listCount, ...listQueryOf(toValue(search), toValue(grades)) },
         signal,
       }),
     placeholderData: (former) => former,
@@ -69,9 +66,24 @@ export function useSpanList(search: MaybeRefOrGetter<string>, grades: MaybeRefOr
 export const useBases = () =>
   useQuery({ queryKey: mapKeys.bases, queryFn: () => call('listBases', { query: { limitCount: 200 } }) });
 
-type SpanQuery = Readonly<{ bboxDeg?: string; sectionId?: string; spanIds?: string }>;
+export type SpanQuery = Readonly<{
+  bboxDeg?: string;
+  sectionId?: string;
+  spanIds?: string;
+  search?: string;
+  grades?: string;
+}>;
 const pageCount = 2000;
-const mostPicked = 20_000;
+/** As many as one assessment takes by name. */
+export const mostPicked = 20_000;
+
+/** Text and grades of the list as the service takes them. */
+export function listQueryOf(search: string, grades: readonly Grade[]): SpanQuery {
+  return {
+    ...(search.trim() === '' ? {} : { search: search.trim() }),
+    ...(grades.length === 0 ? {} : { grades: grades.join(',') }),
+  };
+}
 
 /** Reads every span that fits, page by page, and keeps each under its id for the tray. */
 export async function fetchSpans(client: QueryClient, query: SpanQuery): Promise<SpanListItem[]> {
@@ -83,14 +95,17 @@ export async function fetchSpans(client: QueryClient, query: SpanQuery): Promise
     });
     items.push(...page.items);
     cursor = page.nextCursor;
-  } while (cursor !== null && items.length < mostPicked);
+  } while (cursor !== null && items.length <= mostPicked);
+  // Nothing observes these one by one; they must last as long as the spans are picked.
+  client.setQueryDefaults(mapKeys.spanItems, { gcTime: Infinity });
   for (const item of items) client.setQueryData(mapKeys.spanItem(item.id), item);
-  return items.slice(0, mostPicked);
+  return items;
 }
 
 export interface AssessPicked {
   readonly basisId: string | null;
-  readonly spanIds: readonly string[];
+  /** Null assesses the whole network. */
+  readonly spanIds: readonly string[] | null;
   readonly key: string;
 }
 
@@ -101,7 +116,7 @@ export function useAssessPicked() {
       call('createAssessment', {
         body: {
           id: key,
-          selection: { kind: 'spans', spanIds: [...spanIds] },
+          selection: spanIds === null ? { kind: 'whole-network' } : { kind: 'spans', spanIds: [...spanIds] },
           ...(basisId === null ? {} : { basisId }),
         },
         idempotencyKey: key,

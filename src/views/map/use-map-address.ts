@@ -42,6 +42,7 @@ export function useMapAddress() {
     showPlace: (place: MapPlace) =>
       change({ lat: place.latitudeDeg.toFixed(5), lng: place.longitudeDeg.toFixed(5), z: String(place.zoom) }),
     setGrades: (grades: readonly Grade[]) => change({ grades: grades.length === 0 ? undefined : grades.join(',') }),
+    setSection: (sectionId: string | undefined) => change({ section: sectionId }),
     setSearch: (search: string) => change({ search: search === '' ? undefined : search }),
   };
 }

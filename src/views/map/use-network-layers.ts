@@ -1,10 +1,18 @@
 import { useDebounceFn, useMutationObserver } from '@vueuse/core';
 import * as leaflet from 'leaflet';
-import { computed, shallowRef, watch, type ShallowRef } from 'vue';
+import { computed, shallowRef, watch, type ComputedRef, type ShallowRef } from 'vue';
 import { z } from 'zod';
 import type { Grade } from '#shared/contract/grades.ts';
 import { multiPolygonSchema } from '#shared/contract/map.ts';
-import { drawLand, drawSections, drawSpans, drawStructures, drawTerrain, type LineDrawing } from './draw-layers.ts';
+import {
+  drawLand,
+  drawPicked,
+  drawSections,
+  drawSpans,
+  drawStructures,
+  drawTerrain,
+  type LineDrawing,
+} from './draw-layers.ts';
 import { readMapPalette, type MapPalette } from './line-style.ts';
 import { useMapSections, useMapSpans, useMapStructures, useMapTerrain } from './queries.ts';
 
@@ -17,6 +25,8 @@ const hitTolerancePx = 9;
 interface Given {
   readonly grades: () => readonly Grade[];
   readonly picked: () => ReadonlySet<string>;
+  /** Sections with a picked span, marked while single spans are not drawn. */
+  readonly pickedSections: () => ReadonlySet<string>;
   readonly onSpan: (spanId: string) => void;
   readonly onSection: (sectionId: string) => void;
 }
@@ -24,6 +34,7 @@ interface Given {
 interface Groups {
   readonly land: leaflet.LayerGroup;
   readonly terrain: leaflet.LayerGroup;
+  readonly picked: leaflet.LayerGroup;
   readonly sections: leaflet.LayerGroup;
   readonly spans: leaflet.LayerGroup;
   readonly structures: leaflet.LayerGroup;
@@ -48,9 +59,21 @@ async function drawWorld(group: leaflet.LayerGroup, palette: MapPalette, rendere
   for (const { geometry } of world.features) drawLand(group, geometry.coordinates, { palette, renderer });
 }
 
+const pickedPane = 'picked';
+/** Above tiles (200) and below lines (400). */
+const pickedPaneLevel = '390';
+
 function makeGroups(instance: leaflet.Map): Groups {
+  instance.createPane(pickedPane).style.zIndex = pickedPaneLevel;
   const group = () => leaflet.layerGroup().addTo(instance);
-  return { land: group(), terrain: group(), sections: group(), spans: group(), structures: group() };
+  return {
+    land: group(),
+    terrain: group(),
+    picked: group(),
+    sections: group(),
+    spans: group(),
+    structures: group(),
+  };
 }
 
 /** Box to fetch single spans for; null while the map is too far out. */
@@ -78,53 +101,83 @@ function useMapPalette(map: Readonly<ShallowRef<leaflet.Map | null>>) {
   return palette;
 }
 
-/** Terrain, sections, spans and structures on the map; what is near enough is fetched by box, the rest once. */
-export function useNetworkLayers(map: Readonly<ShallowRef<leaflet.Map | null>>, given: Given) {
-  const palette = useMapPalette(map);
-  const nearBox = useNearBox(map);
-  const renderer = leaflet.canvas({ tolerance: hitTolerancePx, padding: 0.5 });
-  const groundRenderer = leaflet.canvas({ pane: 'tilePane' });
-  const [terrain, sections] = [useMapTerrain(), useMapSections()];
-  const [spans, structures] = [useMapSpans(nearBox), useMapStructures(nearBox)];
-  const isNear = computed(() => nearBox.value !== null);
-  const groups = computed(() => (map.value === null ? null : makeGroups(map.value)));
-  const drawing = computed((): LineDrawing | null => {
-    if (palette.value === null) return null;
-    const picked = given.picked();
-    return {
-      palette: palette.value,
-      renderer,
-      grades: given.grades(),
-      isPicked: (id) => picked.has(id),
-      onPick: given.onSpan,
-    };
-  });
+type MapData = ReturnType<typeof useMapData>;
 
+function useMapData(nearBox: Readonly<ShallowRef<string | null>>) {
+  return {
+    terrain: useMapTerrain().data,
+    sections: useMapSections().data,
+    spans: useMapSpans(nearBox).data,
+    structures: useMapStructures(nearBox).data,
+  };
+}
+
+interface Canvas {
+  readonly groups: ComputedRef<Groups | null>;
+  readonly palette: Readonly<ShallowRef<MapPalette | null>>;
+  readonly isNear: ComputedRef<boolean>;
+}
+
+/** Land and terrain, on a canvas below the lines; drawn again only when their colours change. */
+function useGround({ groups, palette }: Canvas, { terrain }: MapData): void {
+  const renderer = leaflet.canvas({ pane: 'tilePane' });
   watch([groups, palette], () => {
     if (groups.value === null || palette.value === null) return;
     // Without the outline the map is only plainer.
-    void drawWorld(groups.value.land, palette.value, groundRenderer).catch(() => undefined);
+    void drawWorld(groups.value.land, palette.value, renderer).catch(() => undefined);
   });
-  watch([groups, drawing, terrain.data], () => {
-    if (groups.value === null || drawing.value === null || terrain.data.value === undefined) return;
-    drawTerrain(groups.value.terrain, terrain.data.value, { palette: drawing.value.palette, renderer: groundRenderer });
+  watch([groups, palette, terrain], () => {
+    if (groups.value === null || palette.value === null || terrain.value === undefined) return;
+    drawTerrain(groups.value.terrain, terrain.value, { palette: palette.value, renderer });
   });
-  watch([groups, drawing, sections.data, isNear], () => {
-    if (groups.value === null || drawing.value === null || sections.data.value === undefined) return;
-    if (isNear.value) groups.value.sections.clearLayers();
-    else
-      drawSections(groups.value.sections, sections.data.value, {
-        ...drawing.value,
-        isPicked: () => false,
-        onPick: given.onSection,
-      });
-  });
-  watch([groups, drawing, spans.data, structures.data, isNear], () => {
+}
+
+/** Sections when far, spans and structures when near. */
+function useLines({ groups, palette, isNear }: Canvas, data: MapData, given: Given): void {
+  const renderer = leaflet.canvas({ tolerance: hitTolerancePx, padding: 0.5 });
+  const drawing = computed((): LineDrawing | null =>
+    palette.value === null ? null : { palette: palette.value, renderer, grades: given.grades(), onPick: given.onSpan },
+  );
+  watch([groups, drawing, data.sections, isNear], () => {
     if (groups.value === null || drawing.value === null) return;
-    for (const group of [groups.value.spans, groups.value.structures]) if (!isNear.value) group.clearLayers();
-    if (isNear.value && spans.data.value !== undefined) drawSpans(groups.value.spans, spans.data.value, drawing.value);
-    if (isNear.value && structures.data.value !== undefined)
-      drawStructures(groups.value.structures, structures.data.value);
+    if (isNear.value) groups.value.sections.clearLayers();
+    else if (data.sections.value !== undefined)
+      drawSections(groups.value.sections, data.sections.value, { ...drawing.value, onPick: given.onSection });
   });
-  return { isNear, isTruncated: computed(() => isNear.value && spans.data.value?.isTruncated === true) };
+  watch([groups, drawing, data.spans, isNear], () => {
+    if (groups.value === null || drawing.value === null) return;
+    if (!isNear.value) groups.value.spans.clearLayers();
+    else if (data.spans.value !== undefined) drawSpans(groups.value.spans, data.spans.value, drawing.value);
+  });
+  watch([groups, data.structures, isNear], () => {
+    if (groups.value === null) return;
+    if (!isNear.value) groups.value.structures.clearLayers();
+    else if (data.structures.value !== undefined) drawStructures(groups.value.structures, data.structures.value);
+  });
+}
+
+/** Halos of what is picked: single spans when near, their sections when far. */
+function usePickedMarks({ groups, palette, isNear }: Canvas, data: MapData, given: Given): void {
+  const renderer = leaflet.canvas({ pane: pickedPane, padding: 0.5 });
+  watch([groups, palette, isNear, data.sections, data.spans, given.picked, given.pickedSections], () => {
+    if (groups.value === null || palette.value === null) return;
+    const lines = isNear.value ? data.spans.value : data.sections.value;
+    const ids = isNear.value ? given.picked() : given.pickedSections();
+    if (lines === undefined) return;
+    drawPicked(groups.value.picked, lines, { palette: palette.value, renderer, isPicked: (id) => ids.has(id) });
+  });
+}
+
+/** Terrain, sections, spans and structures on the map; what is near enough is fetched by box, the rest once. */
+export function useNetworkLayers(map: Readonly<ShallowRef<leaflet.Map | null>>, given: Given) {
+  const nearBox = useNearBox(map);
+  const isNear = computed(() => nearBox.value !== null);
+  const data = useMapData(nearBox);
+  const groups = computed(() => (map.value === null ? null : makeGroups(map.value)));
+  const canvas: Canvas = { groups, palette: useMapPalette(map), isNear };
+  useGround(canvas, data);
+  useLines(canvas, data, given);
+  usePickedMarks(canvas, data, given);
+  const shown = computed(() => (isNear.value ? data.spans.value : data.sections.value));
+  return { isNear, isTruncated: computed(() => shown.value?.isTruncated === true) };
 }

@@ -1,7 +1,9 @@
 import { useQueryClient } from '@tanstack/vue-query';
 import { computed, shallowReadonly, shallowRef } from 'vue';
 import { useAssessmentProgress } from '#src/composables/use-assessment-progress.ts';
-import { useAssessPicked } from './queries.ts';
+import { useAssessPicked, type AssessPicked } from './queries.ts';
+
+type Picked = Omit<AssessPicked, 'key'>;
 
 /** Assesses the picked spans and follows the run; when it ends everything that shows grades is asked again. */
 export function useTrayAssessment(onEnded: () => void) {
@@ -13,15 +15,14 @@ export function useTrayAssessment(onEnded: () => void) {
     void client.invalidateQueries();
   });
 
-  async function assess(picked: { basisId: string | null; spanIds: readonly string[] }): Promise<void> {
+  async function assess(picked: Picked): Promise<void> {
     const assessment = await start.mutateAsync({ ...picked, key: crypto.randomUUID() });
     assessmentId.value = assessment.id;
   }
 
   return {
     // What went wrong stands in the mutation's error, which the tray shows.
-    assess: (picked: { basisId: string | null; spanIds: readonly string[] }) =>
-      void assess(picked).catch(() => undefined),
+    assess: (picked: Picked) => void assess(picked).catch(() => undefined),
     assessmentId: shallowReadonly(assessmentId),
     progress,
     isBroken,

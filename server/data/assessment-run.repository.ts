@@ -66,7 +66,7 @@ export async function insertChunks(
 
 export async function markFrozen(tx: UtilityTransaction, assessmentId: string, totalCount: number): Promise<void> {
   await tx.run(
-    `update assessments set frozen_at = now(), total_count = :totalCount, step = 'computing' where id = :assessmentId`,
+    `update assessments set frozen_at = clock_timestamp(), total_count = :totalCount, step = 'computing' where id = :assessmentId`,
     { assessmentId, totalCount },
   );
 }
@@ -115,7 +115,7 @@ export async function endRun(
   end: { assessmentId: string; state: 'done' | 'failed' | 'cancelled'; failureDetail: string | null },
 ): Promise<boolean> {
   const ended = await tx.run(
-    `update assessments set state = :state::assessment_state, step = 'ended', ended_at = now(), failure_detail = :failureDetail
+    `update assessments set state = :state::assessment_state, step = 'ended', ended_at = clock_timestamp(), failure_detail = :failureDetail
      where id = :assessmentId and state in ('queued', 'running')`,
     end,
   );

@@ -1,5 +1,12 @@
 import type { Finding, FindingSeries } from '#shared/contract/findings.ts';
-import { ENGINE_VERSION, spanWireProfile, spanWireSeries, type SpanSeriesRow } from '#shared/engine/index.ts';
+import {
+  ENGINE_VERSION,
+  spanWireProfile,
+  spanWireSeries,
+  type SpanSeriesRow,
+  type SpanWireCase,
+  type VibrationBasis,
+} from '#shared/engine/index.ts';
 import type { Actor } from '#server/data/database.ts';
 import { engineBasisOf, engineCaseOf, limitsOf } from '#server/data/engine-case.ts';
 import { readFinding } from '#server/data/findings.read-model.ts';
@@ -23,6 +30,26 @@ function rowOf(row: SpanSeriesRow): FindingSeries['rows'][number] {
   };
 }
 
+/** Frequency of the highest clamp stress among rows that have a profile; an amplitude at its limit has none. */
+function worstSteadyHz(rows: readonly SpanSeriesRow[]): number | null {
+  const steady = rows.filter(({ outcome }) => outcome === 'steady');
+  const stressOf = (row: SpanSeriesRow) => Math.max(row.clampStressPa[0] ?? 0, row.clampStressPa[1] ?? 0);
+  const worst = steady.reduce<SpanSeriesRow | null>(
+    (top, row) => (top === null || stressOf(row) > stressOf(top) ? row : top),
+    null,
+  );
+  return worst?.frequencyHz ?? null;
+}
+
+type ProfileAt = (frequencyHz: number | null) => FindingSeries['profile'];
+function profileReader(input: SpanWireCase, basis: VibrationBasis): ProfileAt {
+  return (frequencyHz) => {
+    if (frequencyHz === null) return null;
+    const { outcome, ...profile } = spanWireProfile(input, basis, { frequencyHz, pointCount: profilePointCount });
+    return outcome === 'steady' ? profile : null;
+  };
+}
+
 function seriesOf(finding: Finding, frozen: FrozenCase, frequencyHz: number | null): FindingSeries {
   const limits = limitsOf(frozen);
   const shared = {
@@ -36,22 +63,11 @@ function seriesOf(finding: Finding, frozen: FrozenCase, frequencyHz: number | nu
   const input = engineCaseOf(frozen);
   const basis = engineBasisOf(frozen);
   const { rows } = spanWireSeries(input, basis);
-  const at = frequencyHz ?? finding.frequencyHz;
+  const profileAt = profileReader(input, basis);
+  // A frequency that was asked for is answered as it is; the default one must have something to show.
   const profile =
-    at === null ? null : spanWireProfile(input, basis, { frequencyHz: at, pointCount: profilePointCount });
-  return {
-    ...shared,
-    rows: rows.map(rowOf),
-    profile:
-      profile === null || profile.outcome !== 'steady'
-        ? null
-        : {
-            frequencyHz: profile.frequencyHz,
-            positionsM: [...profile.positionsM],
-            amplitudesM: [...profile.amplitudesM],
-            fluxesW: [...profile.fluxesW],
-          },
-  };
+    frequencyHz === null ? (profileAt(finding.frequencyHz) ?? profileAt(worstSteadyHz(rows))) : profileAt(frequencyHz);
+  return { ...shared, rows: rows.map(rowOf), profile };
 }
 
 export const findingService = ({ database }: Pick<Deps, 'database'>) => {

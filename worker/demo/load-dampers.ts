@@ -5,7 +5,7 @@ import { insertPlacement } from '#server/data/placements.repository.ts';
 import { sides, type Side } from '#shared/contract/placements.ts';
 import { readDampers } from './demo-data.ts';
 
-const spanWireRow = z.object({ id: z.uuid(), spanIndex: z.number(), wireName: z.string() });
+const spanWireRow = z.object({ id: z.uuid(), spanIndex: z.number(), wireName: z.string(), isFitted: z.boolean() });
 type SpanWire = z.infer<typeof spanWireRow>;
 
 interface Placing {
@@ -24,7 +24,8 @@ const plannedAt = '2026-09-01T09:00:00Z';
 function spanWiresOf(tx: UtilityTransaction, lineName: string): Promise<SpanWire[]> {
   return tx.rows(
     spanWireRow,
-    `select span_wires.id, (dense_rank() over (order by sections.order_index, spans.order_index) - 1)::int as span_index, wires.name as wire_name
+    `select span_wires.id, (dense_rank() over (order by sections.order_index, spans.order_index) - 1)::int as span_index, wires.name as wire_name,
+       exists (select from placements where placements.span_wire_id = span_wires.id) as is_fitted
      from span_wires
      join spans on spans.id = span_wires.span_id
      join sections on sections.id = spans.section_id
@@ -95,7 +96,7 @@ async function loadPlanned(tx: UtilityTransaction): Promise<void> {
     for (const spanWire of await spanWiresOf(tx, rule.line)) {
       const isInside =
         spanWire.spanIndex >= rule.fromSpanIndex && spanWire.spanIndex < rule.fromSpanIndex + rule.spanCount;
-      if (!isInside || !rule.wires.includes(spanWire.wireName)) continue;
+      if (!isInside || spanWire.isFitted || !rule.wires.includes(spanWire.wireName)) continue;
       for (const side of sides)
         await place(tx, {
           spanWire,

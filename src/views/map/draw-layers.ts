@@ -18,6 +18,8 @@ export interface LineDrawing {
   /** Grades to show; empty shows all. */
   readonly grades: readonly Grade[];
   readonly onPick: (id: string) => void;
+  /** Pixels between two places at the zoom that holds. */
+  readonly distancePx: (from: [number, number], to: [number, number]) => number;
 }
 
 function isShown(grade: Grade | null, grades: readonly Grade[]): boolean {
@@ -99,8 +101,10 @@ export function drawPicked(group: leaflet.LayerGroup, lines: Sections | Spans, d
     if (drawing.isPicked(id)) leaflet.polyline(path(geometry.coordinates), style).addTo(group);
 }
 
-const tickAtRatio = 0.06;
-const tickHalfRatio = 0.02;
+/** Clear of the square of the structure. */
+const tickAtPx = 12;
+const tickHalfPx = 5;
+const farthestTickRatio = 0.4;
 
 /** A short tick across the span near the end where the damper sits; a planned one is hollow. */
 function drawDamperTick(
@@ -110,6 +114,9 @@ function drawDamperTick(
 ): void {
   const [first, last] = damper.side === 'from' ? [points[0], points.at(-1)] : [points.at(-1), points[0]];
   if (first === undefined || last === undefined) return;
+  const spanPx = Math.max(damper.drawing.distancePx(first, last), 1);
+  const tickAtRatio = Math.min(tickAtPx / spanPx, farthestTickRatio);
+  const tickHalfRatio = tickHalfPx / spanPx;
   const latitudeScale = Math.cos((first[0] * Math.PI) / 180);
   const [north, east] = [last[0] - first[0], (last[1] - first[1]) * latitudeScale];
   const centre = [first[0] + north * tickAtRatio, first[1] + (east * tickAtRatio) / latitudeScale] as const;
@@ -119,9 +126,9 @@ function drawDamperTick(
     [centre[0] + across[0], centre[1] + across[1]],
   ];
   const { palette, renderer } = damper.drawing;
-  leaflet.polyline(ends, { color: palette.ink, weight: 5, renderer, interactive: false }).addTo(group);
+  leaflet.polyline(ends, { color: palette.ink, weight: 4, renderer, interactive: false }).addTo(group);
   if (!damper.isAsBuilt)
-    leaflet.polyline(ends, { color: palette.paper, weight: 2, renderer, interactive: false }).addTo(group);
+    leaflet.polyline(ends, { color: palette.paper, weight: 1.5, renderer, interactive: false }).addTo(group);
 }
 
 /** Structures as small footprints: dead-ends filled, suspensions open. */

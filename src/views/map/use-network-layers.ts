@@ -113,6 +113,7 @@ function useMapData(nearBox: Readonly<ShallowRef<string | null>>) {
 }
 
 interface Canvas {
+  readonly map: Readonly<ShallowRef<leaflet.Map | null>>;
   readonly groups: ComputedRef<Groups | null>;
   readonly palette: Readonly<ShallowRef<MapPalette | null>>;
   readonly isNear: ComputedRef<boolean>;
@@ -133,10 +134,16 @@ function useGround({ groups, palette }: Canvas, { terrain }: MapData): void {
 }
 
 /** Sections when far, spans and structures when near. */
-function useLines({ groups, palette, isNear }: Canvas, data: MapData, given: Given): void {
+function useLines({ map, groups, palette, isNear }: Canvas, data: MapData, given: Given): void {
   const renderer = leaflet.canvas({ tolerance: hitTolerancePx, padding: 0.5 });
+  const distancePx = (from: [number, number], to: [number, number]) => {
+    const instance = map.value;
+    return instance === null ? 0 : instance.project(from).distanceTo(instance.project(to));
+  };
   const drawing = computed((): LineDrawing | null =>
-    palette.value === null ? null : { palette: palette.value, renderer, grades: given.grades(), onPick: given.onSpan },
+    palette.value === null
+      ? null
+      : { palette: palette.value, renderer, grades: given.grades(), onPick: given.onSpan, distancePx },
   );
   watch([groups, drawing, data.sections, isNear], () => {
     if (groups.value === null || drawing.value === null) return;
@@ -174,7 +181,7 @@ export function useNetworkLayers(map: Readonly<ShallowRef<leaflet.Map | null>>, 
   const isNear = computed(() => nearBox.value !== null);
   const data = useMapData(nearBox);
   const groups = computed(() => (map.value === null ? null : makeGroups(map.value)));
-  const canvas: Canvas = { groups, palette: useMapPalette(map), isNear };
+  const canvas: Canvas = { map, groups, palette: useMapPalette(map), isNear };
   useGround(canvas, data);
   useLines(canvas, data, given);
   usePickedMarks(canvas, data, given);

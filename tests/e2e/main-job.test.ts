@@ -65,7 +65,7 @@ describe('an asset engineer', () => {
       name: 'Ines Halvorsen',
       path: '/?lat=-38.5&lng=-21&z=13',
     });
-    await page.locator('.structure').first().waitFor();
+    await page.locator('.leaflet-marker-icon.structure').first().waitFor();
     await page.getByRole('button', { name: 'Box', exact: true }).click();
     const map = page.locator('.leaflet-container');
     const box = await map.boundingBox();
@@ -80,7 +80,7 @@ describe('an asset engineer', () => {
     await page.getByRole('button', { name: 'Clear' }).click();
     await page.getByRole('region', { name: 'Picked spans' }).waitFor({ state: 'detached' });
     const [middleX = 0, middleY = 0] = await page.evaluate(() => {
-      const places = [...document.querySelectorAll('.structure')].map((element) => element.getBoundingClientRect());
+      const places = [...document.querySelectorAll('.leaflet-marker-icon.structure')].map((element) => element.getBoundingClientRect());
       const centre = (place: DOMRect) => [place.x + place.width / 2, place.y + place.height / 2] as const;
       const inside = places.map(centre).filter(([x, y]) => x > 500 && x < 1300 && y > 200 && y < 650);
       // Between two structures that stand next to each other runs a span.

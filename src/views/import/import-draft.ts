@@ -37,6 +37,16 @@ export function freshDraft(): ImportDraft {
   };
 }
 
+/** Largest file that the service takes. */
+const largestFileBytes = 40 * 1024 * 1024;
+
+/** What is wrong with a file before it is sent; empty when nothing is. */
+export function fileFault(file: Readonly<{ name: string; size: number }>): string {
+  if (formatOf(file.name) === null) return 'Choose a file that ends in .geojson, .json or .csv.';
+  if (file.size === 0) return 'The file is empty.';
+  return file.size > largestFileBytes ? 'The file is larger than 40 MB. Split it by lines.' : '';
+}
+
 /** Format by the name of a file; null when the name tells nothing. */
 export function formatOf(fileName: string): ImportOptions['format'] | null {
   if (/\.(geo)?json$/i.test(fileName)) return 'geojson';
@@ -57,8 +67,13 @@ function assumptionsOf(draft: ImportDraft): object {
   };
 }
 
+/** What is wrong by field, e.g. `typicalSpanLengthM` or `voltageClasses.0.conductorName`. */
+export type DraftFaults = Readonly<Record<string, string>>;
 export type CheckedDraft =
-  { readonly ok: true; readonly options: ImportOptions } | { readonly ok: false; readonly faults: readonly string[] };
+  { readonly ok: true; readonly options: ImportOptions } | { readonly ok: false; readonly faults: DraftFaults };
+
+const missingWords: Readonly<Record<string, string>> = { conductorName: 'Choose a conductor from the catalogue.' };
+const numberMissing = 'Enter a number.';
 
 /** The options of a draft by the contract, or what is wrong with it. */
 export function checkDraft(draft: ImportDraft, isDryRun: boolean): CheckedDraft {
@@ -75,5 +90,10 @@ export function checkDraft(draft: ImportDraft, isDryRun: boolean): CheckedDraft 
       : {}),
   });
   if (parsed.success) return { ok: true, options: parsed.data };
-  return { ok: false, faults: parsed.error.issues.map(({ path, message }) => `${path.join(' ')}: ${message}`) };
+  const faults = parsed.error.issues.map(({ code, path, message }) => {
+    const field = path.filter((part) => part !== 'assumptions' && part !== 'properties').join('.');
+    const isMissing = code === 'invalid_type';
+    return [field, missingWords[String(path.at(-1))] ?? (isMissing ? numberMissing : message)] as const;
+  });
+  return { ok: false, faults: Object.fromEntries(faults) };
 }

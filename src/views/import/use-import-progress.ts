@@ -11,6 +11,8 @@ export const isImportEnded = (state: ImportProgress['state']) =>
 /** Follows an import by server-sent events until it ends. */
 export function useImportProgress(importId: MaybeRefOrGetter<string | null>, onEnded: () => void) {
   const progress = shallowRef<ImportProgress | null>(null);
+  /** True while the connection is broken; the browser takes it up again by itself. */
+  const isBroken = shallowRef(false);
   let source: EventSource | null = null;
   const close = () => {
     source?.close();
@@ -21,9 +23,12 @@ export function useImportProgress(importId: MaybeRefOrGetter<string | null>, onE
     (id) => {
       close();
       progress.value = null;
+      isBroken.value = false;
       if (id === null) return;
       source = new EventSource(addressOf('watchImport', { params: { importId: id } }));
+      source.onerror = () => (isBroken.value = true);
       source.onmessage = (event: MessageEvent<string>) => {
+        isBroken.value = false;
         progress.value = importProgressSchema.parse(JSON.parse(event.data));
         if (!isImportEnded(progress.value.state)) return;
         close();
@@ -33,5 +38,5 @@ export function useImportProgress(importId: MaybeRefOrGetter<string | null>, onE
     { immediate: true },
   );
   onScopeDispose(close);
-  return { progress: shallowReadonly(progress) };
+  return { progress: shallowReadonly(progress), isBroken: shallowReadonly(isBroken) };
 }

@@ -102,9 +102,10 @@ export function drawPicked(group: leaflet.LayerGroup, lines: Sections | Spans, d
 }
 
 /** Clear of the square of the structure. */
-const tickAtPx = 12;
-const tickHalfPx = 5;
-const farthestTickRatio = 0.4;
+const tickAtPx = 10;
+const tickHalfPx = 4;
+/** On a shorter span the ticks of both ends would run together. */
+const leastSpanPx = 40;
 
 /** A short tick across the span near the end where the damper sits; a planned one is hollow. */
 function drawDamperTick(
@@ -114,8 +115,9 @@ function drawDamperTick(
 ): void {
   const [first, last] = damper.side === 'from' ? [points[0], points.at(-1)] : [points.at(-1), points[0]];
   if (first === undefined || last === undefined) return;
-  const spanPx = Math.max(damper.drawing.distancePx(first, last), 1);
-  const tickAtRatio = Math.min(tickAtPx / spanPx, farthestTickRatio);
+  const spanPx = damper.drawing.distancePx(first, last);
+  if (spanPx < leastSpanPx) return;
+  const tickAtRatio = tickAtPx / spanPx;
   const tickHalfRatio = tickHalfPx / spanPx;
   const latitudeScale = Math.cos((first[0] * Math.PI) / 180);
   const [north, east] = [last[0] - first[0], (last[1] - first[1]) * latitudeScale];
@@ -126,9 +128,9 @@ function drawDamperTick(
     [centre[0] + across[0], centre[1] + across[1]],
   ];
   const { palette, renderer } = damper.drawing;
-  leaflet.polyline(ends, { color: palette.ink, weight: 4, renderer, interactive: false }).addTo(group);
-  if (!damper.isAsBuilt)
-    leaflet.polyline(ends, { color: palette.paper, weight: 1.5, renderer, interactive: false }).addTo(group);
+  const style = { lineCap: 'butt', renderer, interactive: false } as const;
+  leaflet.polyline(ends, { ...style, color: palette.ink, weight: 3 }).addTo(group);
+  if (!damper.isAsBuilt) leaflet.polyline(ends, { ...style, color: palette.paper, weight: 1 }).addTo(group);
 }
 
 /** Structures as small footprints: dead-ends filled, suspensions open. */

@@ -92,7 +92,7 @@ export async function markChunkDone(
   chunk: { assessmentId: string; chunkIndex: number; spanWireCount: number },
 ): Promise<void> {
   const done = await tx.run(
-    'update assessment_chunks set done_at = now() where assessment_id = :assessmentId and chunk_index = :chunkIndex and done_at is null',
+    'update assessment_chunks set done_at = clock_timestamp() where assessment_id = :assessmentId and chunk_index = :chunkIndex and done_at is null',
     chunk,
   );
   if (done === 1)

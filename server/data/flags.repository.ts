@@ -5,7 +5,7 @@ import type { UtilityTransaction } from './database.ts';
 export async function closeFlags(tx: UtilityTransaction, assessmentId: string): Promise<void> {
   await tx.run(
     `update flags set closed_at = now(), closed_by_finding_id = findings.id
-     from findings join span_wires on span_wires.current_finding_id = findings.id
+     from findings join span_wires on span_wires.id = findings.span_wire_id and span_wires.current_finding_id = findings.id
      where findings.assessment_id = :assessmentId and findings.grade <> 'urgent'
        and flags.span_wire_id = findings.span_wire_id and flags.closed_at is null`,
     { assessmentId },
@@ -19,7 +19,7 @@ export async function openFlagsAndAlerts(tx: UtilityTransaction, assessmentId: s
     `with opened as (
        insert into flags (id, utility_id, span_wire_id, finding_id)
        select gen_random_uuid(), :utilityId, findings.span_wire_id, findings.id
-       from findings join span_wires on span_wires.current_finding_id = findings.id
+       from findings join span_wires on span_wires.id = findings.span_wire_id and span_wires.current_finding_id = findings.id
        where findings.assessment_id = :assessmentId and findings.grade = 'urgent'
        on conflict (span_wire_id) where closed_at is null do nothing
        returning id, span_wire_id, finding_id
@@ -33,7 +33,10 @@ export async function openFlagsAndAlerts(tx: UtilityTransaction, assessmentId: s
 
 /** People who are told of Urgent spans. */
 export async function listSafetyOfficerIds(tx: UtilityTransaction): Promise<string[]> {
-  const rows = await tx.rows(z.object({ personId: z.uuid() }), `select person_id from person_roles where role = 'safety-officer'`);
+  const rows = await tx.rows(
+    z.object({ personId: z.uuid() }),
+    `select person_id from person_roles where role = 'safety-officer'`,
+  );
   return rows.map(({ personId }) => personId);
 }
 

@@ -44,13 +44,18 @@ async function throughTheWorker(stack: Stack): Promise<number> {
     await pause(100);
   }
   const [row] = await asSuperuser(stack.testDatabase.superuserUrl, async (client) => {
-    const found = await client.query<{ seconds: number }>(
-      `select extract(epoch from ended_at - started_at)::float8 as seconds from assessments where id = $1`,
+    const found = await client.query<{ total: number; freezing: number; computing: number; finishing: number }>(
+      `select extract(epoch from ended_at - started_at)::float8 as total, extract(epoch from frozen_at - started_at)::float8 as freezing,
+         extract(epoch from computed.at - frozen_at)::float8 as computing, extract(epoch from ended_at - computed.at)::float8 as finishing
+       from assessments, (select max(done_at) as at from assessment_chunks where assessment_id = $1) as computed where id = $1`,
       [assessmentId],
     );
     return found.rows;
   });
-  return row?.seconds ?? Number.NaN;
+  if (row === undefined) throw new Error('the assessment vanished');
+  const phases = ['freezing', 'computing', 'finishing'] as const;
+  process.stdout.write(`${phases.map((phase) => `${phase} ${row[phase].toFixed(2)} s`).join(', ')}\n`);
+  return row.total;
 }
 
 async function bareEngine(stack: Stack): Promise<number> {

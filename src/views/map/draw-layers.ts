@@ -17,7 +17,6 @@ export interface LineDrawing {
   readonly renderer: leaflet.Renderer;
   /** Grades to show; empty shows all. */
   readonly grades: readonly Grade[];
-  readonly onPick: (id: string) => void;
   /** Pixels between two places at the zoom that holds. */
   readonly distancePx: (from: [number, number], to: [number, number]) => number;
 }
@@ -34,6 +33,26 @@ interface DrawnLine {
   readonly tooltip: string;
 }
 
+/** What each stroke that takes clicks stands for. */
+const drawnLines = new WeakMap<leaflet.Layer, DrawnLine>();
+
+/**
+ * A group whose lines share one tooltip and one click handler: thousands of their own would make drawing slow.
+ *
+ * @param onPick told the id of the line that was clicked
+ */
+export function lineGroup(onPick: (id: string) => void): leaflet.FeatureGroup {
+  const group = leaflet.featureGroup();
+  group.bindTooltip((layer) => drawnLines.get(layer)?.tooltip ?? '', { sticky: true });
+  group.on('click', (event: leaflet.LeafletMouseEvent) => {
+    leaflet.DomEvent.stopPropagation(event);
+    const layer: unknown = event.propagatedFrom;
+    const line = layer instanceof leaflet.Layer ? drawnLines.get(layer) : undefined;
+    if (line !== undefined) onPick(line.id);
+  });
+  return group;
+}
+
 function addLine(group: leaflet.LayerGroup, line: DrawnLine, drawing: LineDrawing): void {
   const { renderer, palette } = drawing;
   const strokes = strokesOf(line, palette);
@@ -41,11 +60,7 @@ function addLine(group: leaflet.LayerGroup, line: DrawnLine, drawing: LineDrawin
     // The lowest stroke takes the clicks; those above it only draw.
     const drawn = leaflet.polyline(line.points, { ...stroke, renderer, interactive: index === 0 }).addTo(group);
     if (index > 0) return;
-    drawn.bindTooltip(line.tooltip, { sticky: true });
-    drawn.on('click', (event) => {
-      leaflet.DomEvent.stopPropagation(event);
-      drawing.onPick(line.id);
-    });
+    drawnLines.set(drawn, line);
   });
 }
 

@@ -11,12 +11,13 @@ import {
   drawSpans,
   drawStructures,
   drawTerrain,
+  lineGroup,
   type LineDrawing,
 } from './draw-layers.ts';
 import { readMapPalette, type MapPalette } from './line-style.ts';
 import { useMapSections, useMapSpans, useMapStructures, useMapTerrain } from './queries.ts';
 
-export const nearFromZoom = 12;
+export const nearFromZoom = 13;
 const waitMs = 150;
 /** Wider than what is seen, so that a small move needs no new request. */
 const paddingRatio = 0.3;
@@ -63,15 +64,15 @@ const pickedPane = 'picked';
 /** Above tiles (200) and below lines (400). */
 const pickedPaneLevel = '390';
 
-function makeGroups(instance: leaflet.Map): Groups {
+function makeGroups(instance: leaflet.Map, given: Given): Groups {
   instance.createPane(pickedPane).style.zIndex = pickedPaneLevel;
   const group = () => leaflet.layerGroup().addTo(instance);
   return {
     land: group(),
     terrain: group(),
     picked: group(),
-    sections: group(),
-    spans: group(),
+    sections: lineGroup(given.onSection).addTo(instance),
+    spans: lineGroup(given.onSpan).addTo(instance),
     structures: group(),
   };
 }
@@ -141,15 +142,12 @@ function useLines({ map, groups, palette, isNear }: Canvas, data: MapData, given
     return instance === null ? 0 : instance.project(from).distanceTo(instance.project(to));
   };
   const drawing = computed((): LineDrawing | null =>
-    palette.value === null
-      ? null
-      : { palette: palette.value, renderer, grades: given.grades(), onPick: given.onSpan, distancePx },
+    palette.value === null ? null : { palette: palette.value, renderer, grades: given.grades(), distancePx },
   );
   watch([groups, drawing, data.sections, isNear], () => {
     if (groups.value === null || drawing.value === null) return;
     if (isNear.value) groups.value.sections.clearLayers();
-    else if (data.sections.value !== undefined)
-      drawSections(groups.value.sections, data.sections.value, { ...drawing.value, onPick: given.onSection });
+    else if (data.sections.value !== undefined) drawSections(groups.value.sections, data.sections.value, drawing.value);
   });
   watch([groups, drawing, data.spans, isNear], () => {
     if (groups.value === null || drawing.value === null) return;
@@ -180,7 +178,7 @@ export function useNetworkLayers(map: Readonly<ShallowRef<leaflet.Map | null>>, 
   const nearBox = useNearBox(map);
   const isNear = computed(() => nearBox.value !== null);
   const data = useMapData(nearBox);
-  const groups = computed(() => (map.value === null ? null : makeGroups(map.value)));
+  const groups = computed(() => (map.value === null ? null : makeGroups(map.value, given)));
   const canvas: Canvas = { map, groups, palette: useMapPalette(map), isNear };
   useGround(canvas, data);
   useLines(canvas, data, given);

@@ -2,6 +2,7 @@ import { spawnSync } from 'node:child_process';
 import { mkdirSync } from 'node:fs';
 import { join } from 'node:path';
 import { setTimeout as pause } from 'node:timers/promises';
+import { migrateToLatest, openAsOwner } from '#server/data/migrate.ts';
 import { demoPeople } from '../../oidc-fake/people.ts';
 import { projectDirectory } from '../setup.mjs';
 import { applicationEnvironment, publicUrl, type LocalInstallation } from './application-environment.ts';
@@ -107,6 +108,17 @@ function startApplication(environment: Record<string, string>, installation: Loc
   start({ ...shared, name: 'Vite', arguments: vite });
 }
 
+/** Migrates; true when no utility is there yet. In this process, because starting another takes seconds. */
+async function bringUpToDate(ownerUrl: string): Promise<boolean> {
+  const owner = openAsOwner(ownerUrl);
+  try {
+    for (const name of await migrateToLatest(owner)) say(`applied ${name}`);
+    return (await owner('utilities').select('id').limit(1)).length === 0;
+  } finally {
+    await owner.destroy();
+  }
+}
+
 async function waitUntilReady(port: number): Promise<void> {
   const until = Date.now() + 60_000;
   while (Date.now() < until) {
@@ -144,12 +156,12 @@ async function startEverything(): Promise<void> {
   say('Starting PostgreSQL and Redis …');
   await startServices(installation, logs);
   startStandIns(installation, environment, logs);
-  runOnce('migrating', ['server/cli/migrate.ts', 'latest', '--quiet'], environment);
-  await waitForPort(ports.oidc, { name: `oidc-fake (log in ${logs})` });
-  runOnce('loading the demo', ['worker/cli/seed.ts'], environment);
+  if (await bringUpToDate(environment['DATABASE_OWNER_URL'] ?? ''))
+    runOnce('loading the demo', ['worker/cli/seed.ts'], environment);
   if (!isDev) buildClient(projectDirectory);
   startApplication(environment, installation, logs);
   await waitUntilReady(ports.server);
+  await waitForPort(ports.oidc, { name: `oidc-fake (log in ${logs})` });
   announce(installation, logs);
 }
 

@@ -19,8 +19,8 @@ const sentences: Sentences = {
     `Over the limit from wind ${show(reason.windLowerMPerS, 'wind-speed')} to ${show(reason.windUpperMPerS, 'wind-speed')} (${show(reason.frequencyLowerHz, 'frequency')} to ${show(reason.frequencyUpperHz, 'frequency')}).`,
   life: (reason, show) =>
     reason.thresholdYears === null
-      ? `Fatigue life in the wind climate about ${show(reason.lifeYears, 'life')}.`
-      : `Fatigue life in the wind climate about ${show(reason.lifeYears, 'life')}, below the threshold of ${show(reason.thresholdYears, 'life')}.`,
+      ? `Fatigue life in the wind climate: ${show(reason.lifeYears, 'life')}.`
+      : `Fatigue life in the wind climate: ${show(reason.lifeYears, 'life')}, below the threshold of ${show(reason.thresholdYears, 'life')}.`,
   'no-damper': (reason, show) =>
     `No damper at structure ${reason.structureName}; everyday tension ${show(reason.tensionRatedRatio, 'share')} of rated strength, H/w ${show(reason.hOverWM, 'length')}.`,
   'weak-absorption': (reason, show) =>

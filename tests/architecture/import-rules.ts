@@ -52,7 +52,7 @@ export const zones: readonly Zone[] = [
   { name: 'migrations', path: /^migrations\//, zones: [], packages: /^knex$/ },
   { name: 'seeds', path: /^seeds\//, zones: [], packages: /^(node:.*|zod|geographiclib-geodesic)$/ },
   { name: 'oidc-fake', path: /^oidc-fake\//, zones: [], packages: /.*/ },
-  { name: 'scripts', path: /^scripts\//, zones: ['oidc-fake', 'tests'], packages: /.*/ },
+  { name: 'scripts', path: /^scripts\//, zones: ['oidc-fake', 'tests', 'data'], packages: /.*/ },
   {
     name: 'tests',
     path: /^tests\//,

@@ -81,3 +81,12 @@ export { strouhalFrequency, strouhalWindSpeed, tradeStrouhalNumber } from './win
 export { lockInTimeShare, turbulenceFactor } from './wind/turbulence-factor.ts';
 export { turbulenceIntensity } from './wind/turbulence-intensity.ts';
 export { cubicPeakRatio, windPower } from './wind/wind-power.ts';
+export { catenary, catenaryMeanTension, catenarySlack } from './statics/catenary.ts';
+export type { HangingShape, HangingSpan } from './statics/catenary.ts';
+export { iceSleeveMass, lineLoad, windPressure } from './statics/line-load.ts';
+export type { LineLoad, WireLoading } from './statics/line-load.ts';
+export { parabolaLength, parabolaSag } from './statics/parabola.ts';
+export { rulingSpan } from './statics/ruling-span.ts';
+export { stateChange, stateChangeCatenary } from './statics/state-change.ts';
+export type { ChangedTension, StateChange } from './statics/state-change.ts';
+export { terrainFactor, terrainRoughness, terrainWind } from './statics/terrain-wind.ts';

@@ -1,11 +1,9 @@
 import type { UtilityTransaction } from './database.ts';
 import { jsonRows } from './line-import-json-rows.ts';
-import { countLines, type LineRecord } from './line-import-records.ts';
+import { countLines, type LineRecord, type SectionRecord } from './line-import-records.ts';
 
 /** Rows a statement takes: large enough to be quick, small enough to keep memory and progress even. */
-const usualBatchRowCount = 4000;
-/** A wire becomes one row for each span of its section. */
-const wireBatchRowCount = 500;
+const batchRowCount = 4000;
 
 interface SaveOptions {
   readonly importId: string | null;
@@ -17,7 +15,6 @@ interface SaveOptions {
 interface Step {
   readonly rows: readonly object[];
   readonly sql: string;
-  readonly batchRowCount?: number;
 }
 
 const recordset = (columns: string) => `jsonb_to_recordset(:rows::jsonb) as item(${columns})`;
@@ -36,12 +33,10 @@ const structureSql = `insert into structures
 const sectionSql = `insert into sections
     (id, utility_id, line_id, name, order_index, ruling_span_m, section_length_m, geom, is_assumed)
   select item.id, :utilityId::uuid, item.line_id, item.name, item.order_index, item.ruling_span_m, item.section_length_m,
-    (select st_makeline(structures.geom order by place.position)
-      from unnest(item.structure_ids) with ordinality as place(structure_id, position)
-      join structures on structures.id = place.structure_id),
+    st_geomfromtext(item.path_wkt, 4326),
     item.is_assumed
   from ${recordset(`id uuid, line_id uuid, name text, order_index int, ruling_span_m double precision,
-    section_length_m double precision, structure_ids uuid[], is_assumed boolean`)}`;
+    section_length_m double precision, path_wkt text, is_assumed boolean`)}`;
 
 // The smallest zone that covers the middle of the span wins: a wood inside a plain counts as wood.
 const spanSql = `insert into spans
@@ -52,11 +47,9 @@ const spanSql = `insert into spans
     coalesce(zone.roughness_m, :defaultRoughnessM::double precision, utilities.default_roughness_m), zone.id, path.geom,
     item.is_assumed
   from ${recordset(`id uuid, section_id uuid, line_id uuid, order_index int, from_structure_id uuid, to_structure_id uuid,
-    span_length_m double precision, bearing_deg double precision, mean_wire_height_m double precision, is_assumed boolean`)}
+    span_length_m double precision, bearing_deg double precision, mean_wire_height_m double precision, path_wkt text, is_assumed boolean`)}
   join utilities on utilities.id = :utilityId::uuid
-  join structures as first_structure on first_structure.id = item.from_structure_id
-  join structures as second_structure on second_structure.id = item.to_structure_id
-  cross join lateral (select st_makeline(first_structure.geom, second_structure.geom) as geom) as path
+  cross join lateral (select st_geomfromtext(item.path_wkt, 4326) as geom) as path
   left join lateral (
     select terrain_zones.id, terrain_zones.roughness_m from terrain_zones
     where st_covers(terrain_zones.geom, st_lineinterpolatepoint(path.geom, 0.5))
@@ -69,13 +62,30 @@ const wireSql = `insert into wires (id, utility_id, section_id, name, kind, cond
   from ${recordset(`id uuid, section_id uuid, name text, kind text, conductor_type_id uuid, tension_n double precision,
     is_assumed boolean`)}`;
 
+// Rows come whole, without a join: after a first import the planner does not know yet how many rows a utility has.
 const spanWireSql = `insert into span_wires (id, utility_id, span_id, wire_id, section_id)
-  select gen_random_uuid(), :utilityId::uuid, spans.id, wires.id, wires.section_id
-  from ${recordset('id uuid')}
-  join wires on wires.id = item.id
-  join spans on spans.section_id = wires.section_id`;
+  select gen_random_uuid(), :utilityId::uuid, item.span_id, item.wire_id, item.section_id
+  from ${recordset('span_id uuid, wire_id uuid, section_id uuid')}`;
+
+type Path = (structureIds: readonly string[]) => string;
+
+/** Paths through structures as well-known text. */
+function pathsOf(lines: readonly LineRecord[]): Path {
+  const places = new Map(
+    lines.flatMap(({ structures }) =>
+      structures.map(({ id, longitudeDeg, latitudeDeg }) => [id, `${longitudeDeg} ${latitudeDeg}`] as const),
+    ),
+  );
+  return (structureIds) => `LINESTRING(${structureIds.flatMap((id) => places.get(id) ?? []).join(', ')})`;
+}
+
+function structureIdsOf({ spans }: SectionRecord): string[] {
+  const first = spans.slice(0, 1).map(({ fromStructureId }) => fromStructureId);
+  return [...first, ...spans.map(({ toStructureId }) => toStructureId)];
+}
 
 function stepsOf(lines: readonly LineRecord[]): Step[] {
+  const pathThrough = pathsOf(lines);
   const sections = lines.flatMap(({ id, isAssumed, sections: own }) =>
     own.map((section) => ({ ...section, lineId: id, isAssumed })),
   );
@@ -92,19 +102,30 @@ function stepsOf(lines: readonly LineRecord[]): Step[] {
     },
     {
       sql: sectionSql,
-      rows: sections.map(({ spans, wires: _wires, ...section }) => ({
+      rows: sections.map(({ spans: _spans, wires: _wires, ...section }, index) => ({
         ...section,
-        structureIds: [...spans.map(({ fromStructureId }) => fromStructureId), spans[spans.length - 1]?.toStructureId],
+        pathWkt: pathThrough(sections[index] === undefined ? [] : structureIdsOf(sections[index])),
       })),
     },
     {
       sql: spanSql,
       rows: sections.flatMap(({ id, lineId, isAssumed, spans }) =>
-        spans.map((span) => ({ ...span, sectionId: id, lineId, isAssumed })),
+        spans.map((span) => ({
+          ...span,
+          sectionId: id,
+          lineId,
+          isAssumed,
+          pathWkt: pathThrough([span.fromStructureId, span.toStructureId]),
+        })),
       ),
     },
     { sql: wireSql, rows: wires },
-    { sql: spanWireSql, rows: wires.map(({ id }) => ({ id })), batchRowCount: wireBatchRowCount },
+    {
+      sql: spanWireSql,
+      rows: sections.flatMap(({ id: sectionId, spans, wires: own }) =>
+        own.flatMap((wire) => spans.map((span) => ({ spanId: span.id, wireId: wire.id, sectionId }))),
+      ),
+    },
   ];
 }
 
@@ -123,7 +144,7 @@ export async function saveLines(
   const { utilityId } = tx.actor;
   const { importId, defaultRoughnessM, onProgress } = options;
   let doneCount = 0;
-  for (const { sql, rows, batchRowCount = usualBatchRowCount } of stepsOf(lines)) {
+  for (const { sql, rows } of stepsOf(lines)) {
     for (let start = 0; start < rows.length; start += batchRowCount) {
       const batch = rows.slice(start, start + batchRowCount);
       const savedCount = await tx.run(sql, { utilityId, importId, defaultRoughnessM, rows: jsonRows(batch) });

@@ -1,4 +1,5 @@
 import { assertNumber } from '../numerics/assert-number.ts';
+import { EngineInputError } from '../numerics/engine-input-error.ts';
 
 /** A level span that may stretch and move in its own plane. */
 export interface ElasticSpan {
@@ -67,11 +68,11 @@ export function irvineParameter(span: ElasticSpan): number {
 export function symmetricModeRatio(irvineNumber: number, modeCount: number): number {
   assertNumber('irvineNumber', irvineNumber, { above: 0 });
   assertNumber('modeCount', modeCount, { atLeast: 1, atMost: 1000 });
-  const mode = Math.floor(modeCount);
+  if (!Number.isInteger(modeCount)) throw new EngineInputError('modeCount', 'must be a whole number');
   // Multiplied by the cosine: no poles. One root lies between each odd multiple of π/2 and the next.
   const secular = (u: number) => Math.sin(u) - Math.cos(u) * (u - (4 * u ** 3) / irvineNumber);
-  let low = (mode - 0.5) * Math.PI;
-  let high = (mode + 0.5) * Math.PI;
+  let low = (modeCount - 0.5) * Math.PI;
+  let high = (modeCount + 0.5) * Math.PI;
   const rising = Math.sign(secular(high));
   const halvingCount = 60;
   for (let index = 0; index < halvingCount; index += 1) {

@@ -4,22 +4,12 @@ import { createApp } from './app.ts';
 import { openDatabase } from './data/database.ts';
 import { jobPoke } from './jobs/job-poke.ts';
 import { progressFeed } from './jobs/progress-feed.ts';
-import { ConfigError, loadConfig, type Config } from './platform/config.ts';
+import { loadConfigOrExit } from './platform/config.ts';
 import { openFileStore } from './platform/files.ts';
 import { openLogger } from './platform/logger.ts';
 import { openFailFastRedis, openWaitingRedis } from './platform/redis.ts';
 
-function configOrExit(): Config {
-  try {
-    return loadConfig();
-  } catch (error) {
-    if (!(error instanceof ConfigError)) throw error;
-    process.stderr.write(`${error.message}\n`);
-    process.exit(2);
-  }
-}
-
-const config = configOrExit();
+const config = loadConfigOrExit();
 const logger = openLogger(config, 'server');
 const database = openDatabase(config.DATABASE_URL);
 const sessionPool = new pg.Pool({ connectionString: config.DATABASE_URL, max: 5 });

@@ -1,21 +1,11 @@
 import { createTransport } from 'nodemailer';
 import { openDatabase } from '#server/data/database.ts';
-import { ConfigError, loadConfig, type Config } from '#server/platform/config.ts';
+import { loadConfigOrExit } from '#server/platform/config.ts';
 import { openFileStore } from '#server/platform/files.ts';
 import { openLogger } from '#server/platform/logger.ts';
 import { startWorker } from './start-worker.ts';
 
-function configOrExit(): Config {
-  try {
-    return loadConfig();
-  } catch (error) {
-    if (!(error instanceof ConfigError)) throw error;
-    process.stderr.write(`${error.message}\n`);
-    process.exit(2);
-  }
-}
-
-const config = configOrExit();
+const config = loadConfigOrExit();
 const logger = openLogger(config, 'worker');
 const database = openDatabase(config.DATABASE_URL);
 const mailer = createTransport(config.SMTP_URL);

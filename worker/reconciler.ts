@@ -3,6 +3,7 @@ import type { Actor, Database } from '#server/data/database.ts';
 import { listWaitingDeliveries } from '#server/data/deliveries.repository.ts';
 import { listLiveImports } from '#server/data/import-runs.repository.ts';
 import type { Logger } from '#server/platform/logger.ts';
+import { laneCount } from './assessment/lane-count.ts';
 import { jobIdOf } from './queue/dispatch-outbox.ts';
 import type { JobQueues } from './queue/job-queues.ts';
 
@@ -12,12 +13,10 @@ interface Deps {
   readonly logger: Logger;
 }
 
-const lanesLookedAt = 8;
-
 async function hasJob(queues: JobQueues, utilityId: string, assessmentId: string): Promise<boolean> {
   const base = { payloadVersion: 1 as const, utilityId, assessmentId };
   if (await queues.isLive('run-assessment', jobIdOf('run-assessment', base))) return true;
-  for (let laneIndex = 0; laneIndex < lanesLookedAt; laneIndex += 1) {
+  for (let laneIndex = 0; laneIndex < laneCount; laneIndex += 1) {
     if (await queues.isLive('compute-chunks', jobIdOf('compute-chunks', { ...base, laneIndex }))) return true;
   }
   return false;

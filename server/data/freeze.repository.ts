@@ -1,6 +1,7 @@
 import { z } from 'zod';
 import type { Selection } from '#shared/contract/assessments.ts';
 import type { UtilityTransaction } from './database.ts';
+import { frozenConductorSchema } from './frozen-input.ts';
 
 const conditions = {
   spans: 'spans.id = any(:ids::uuid[])',
@@ -59,21 +60,7 @@ export function selectSpanWires(tx: UtilityTransaction, selection: Selection): P
   );
 }
 
-const conductorRow = z.object({
-  id: z.uuid(),
-  name: z.string(),
-  standard: z.string(),
-  kind: z.string(),
-  source: z.string(),
-  standing: z.string(),
-  aluminiumLayerCount: z.number(),
-  diameterM: z.number(),
-  massKgPerM: z.number(),
-  ratedStrengthN: z.number(),
-  bendingStiffnessMinNm2: z.number(),
-  outerStrandDiameterM: z.number(),
-  outerStrandModulusPa: z.number(),
-});
+const conductorRow = frozenConductorSchema.extend({ id: z.uuid() });
 
 export function selectConductors(tx: UtilityTransaction, ids: readonly string[]) {
   return tx.rows(

@@ -7,7 +7,7 @@ import { damperModelSchema } from '#shared/contract/dampers.ts';
  * The input of an assessment as it was when the assessment began. Conductors, dampers and the climate stand once in a
  * chunk and are named by key, because a chunk holds hundreds of span wires that share them.
  */
-const frozenConductorSchema = z.object({
+export const frozenConductorSchema = z.object({
   name: z.string(),
   standard: z.string(),
   kind: z.string(),

@@ -5,7 +5,8 @@ import { AppError } from '#server/platform/errors.ts';
 
 /** Who is signed in, or a refusal. */
 export function signedIn(request: Request): Express.User {
-  if (request.user === undefined || request.user === null) throw new AppError('not-signed-in', 'Nobody is signed in, or the session has ended.');
+  if (request.user === undefined || request.user === null)
+    throw new AppError('not-signed-in', 'Nobody is signed in, or the session has ended.');
   return request.user;
 }
 

@@ -61,6 +61,17 @@ export function loadConfig(environment: Record<string, string | undefined> = pro
   );
 }
 
+/** The settings, or the end of the process with a sentence for the operator. */
+export function loadConfigOrExit(): Config {
+  try {
+    return loadConfig();
+  } catch (error) {
+    if (!(error instanceof ConfigError)) throw error;
+    process.stderr.write(`${error.message}\n`);
+    process.exit(2);
+  }
+}
+
 /** Address of the database as its owner; only migrations and the first set-up of a utility use it. */
 export function loadOwnerDatabaseUrl(environment: Record<string, string | undefined> = process.env): string {
   const parsed = z.url({ protocol: /^postgres(ql)?$/ }).safeParse(environment['DATABASE_OWNER_URL']);

@@ -5,7 +5,6 @@ import { idSchema, pageOf, pageQuery, versionNumberSchema } from './paging.ts';
 import { roughnessMSchema } from './quantity.ts';
 import { route } from './route.ts';
 
-export const conductorKinds = ['ACSR', 'AAC', 'AAAC', 'ACAR', 'AACSR', 'STEEL', 'OPGW', 'OTHER'] as const;
 export const conductorTypeSchema = z.object({
   id: idSchema,
   name: z.string(),

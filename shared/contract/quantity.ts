@@ -20,8 +20,4 @@ export const damperDistanceMSchema = bounded(
   1.05,
 );
 export const roughnessMSchema = bounded([0.0001, 3], 'Aerodynamic roughness length z0, m', 0.05);
-export const longitudeDegSchema = bounded([-180, 180], 'Longitude, WGS84, deg', -31.2);
-export const latitudeDegSchema = bounded([-90, 90], 'Latitude, WGS84, deg', 38.4);
 export const voltageVSchema = bounded([0, 1_500_000], 'Nominal voltage, V', 220_000);
-export const ratioSchema = z.number().min(0).max(1);
-export const countSchema = z.number().int().min(0);

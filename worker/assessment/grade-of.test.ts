@@ -1,34 +1,9 @@
 import { describe, expect, it } from 'vitest';
-import type { BasisSpec } from '#shared/contract/bases.ts';
 import type { SpanWireAssessment } from '#shared/engine/index.ts';
+import { aBasisSpec } from '#tests/support/network.ts';
 import { gradeOf, lifeThresholdYears } from './grade-of.ts';
 
-const spec: BasisSpec = {
-  windBand: { lowerMPerS: 1, upperMPerS: 7 },
-  frequencyCount: 150,
-  methods: {},
-  limits: {
-    enduranceMultiLayerPa: 8.5e6,
-    enduranceSingleLayerPa: 22.5e6,
-    enduranceAlloyPa: 5.7e6,
-    enduranceSource: 'test',
-    damperedStrainRatio: null,
-    damperedStrainConvention: 'peak-to-peak',
-    damperedStrainSource: 'test',
-  },
-  governs: 'limit',
-  thresholds: {
-    noticeFromRatio: 0.8,
-    actFromRatio: 1,
-    urgentFromRatio: 1.5,
-    noticeBelowYears: 100,
-    actBelowYears: 40,
-    urgentBelowYears: 10,
-  },
-  climateId: null,
-  airDensityKgPerM3: 1.225,
-  digestFromCount: 20,
-};
+const spec = aBasisSpec();
 
 function aResult(utilisationRatio: number | null, more: Partial<SpanWireAssessment> = {}): SpanWireAssessment {
   const worst =

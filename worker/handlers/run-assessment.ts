@@ -10,11 +10,9 @@ import {
 import type { Actor, UtilityTransaction } from '#server/data/database.ts';
 import { askForJob } from '#server/data/outbox.ts';
 import { finishRun } from '../assessment/finish-run.ts';
+import { laneCount } from '../assessment/lane-count.ts';
 import { freezeInput, FreezingStopped } from '../assessment/freeze-input.ts';
 import type { WorkerContext } from '../context.ts';
-
-/** Lanes that share the chunks of one assessment: as many workers can compute it side by side. */
-const laneCount = 4;
 
 async function askForLanes(tx: UtilityTransaction, assessmentId: string, turn: string): Promise<void> {
   const chunkCount = await countOpenChunks(tx, assessmentId);
